@@ -11,8 +11,23 @@ config.server.enhanceMiddleware = (mw, server) => {
   const next0 = prev ? prev(mw, server) : mw;
   return (req, res, next) => {
     if (!req.url?.startsWith('/api/')) return next0(req, res, next);
-    const out = http.request({ host: target.hostname, port: target.port, path: req.url, method: req.method, headers: { ...req.headers, host: target.host } }, (r) => { res.writeHead(r.statusCode ?? 502, r.headers); r.pipe(res); });
-    out.on('error', (e) => { res.statusCode = 502; res.end(String(e.message)); });
+    const out = http.request(
+      {
+        host: target.hostname,
+        port: target.port,
+        path: req.url,
+        method: req.method,
+        headers: { ...req.headers, host: target.host },
+      },
+      (r) => {
+        res.writeHead(r.statusCode ?? 502, r.headers);
+        r.pipe(res);
+      },
+    );
+    out.on('error', (e) => {
+      res.statusCode = 502;
+      res.end(String(e.message));
+    });
     req.pipe(out);
   };
 };
