@@ -12,6 +12,7 @@ export type StoredFrameState = (typeof storedFrameStates)[number];
 @Unique('uq_frame_laboratory_id', ['laboratoryId', 'id'])
 @Unique('uq_frame_sha256', ['laboratoryId', 'sha256'])
 @Check('ck_frame_sha256', "sha256 ~ '^[0-9a-f]{64}$'")
+@Check('ck_frame_stored', "state = 'storing' or (sha256 is not null and byte_size > 0 and chunk_count > 0)")
 @Check('ck_frame_state', oneOf('state', storedFrameStates))
 @Check('ck_frame_problem', "(state = 'unusable') = (problem is not null)")
 @Check('ck_frame_sizes', 'byte_size >= 0 and chunk_count >= 0 and width_px > 0 and height_px > 0 and bit_depth > 0')
@@ -20,9 +21,10 @@ export type StoredFrameState = (typeof storedFrameStates)[number];
   "state <> 'ready' or (format is not null and width_px is not null and height_px is not null and bit_depth is not null)",
 )
 export class FrameEntity extends LaboratoryRow {
-  @Column({ type: 'text' }) sha256: string;
-  @Column({ type: 'integer' }) byteSize: number;
-  @Column({ type: 'integer' }) chunkCount: number;
+  /** Null only while the chunks arrive; afterwards it never changes. */
+  @Column({ type: 'text', nullable: true }) sha256: string | null;
+  @Column({ type: 'integer', default: 0 }) byteSize: number;
+  @Column({ type: 'integer', default: 0 }) chunkCount: number;
   @Column({ type: 'text', default: 'storing' }) state: StoredFrameState;
   @Column({ type: 'text', nullable: true }) problem: string | null;
   @Column({ type: 'text', nullable: true }) format: string | null;
