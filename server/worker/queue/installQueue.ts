@@ -8,7 +8,7 @@ import { QUEUE_SCHEMA, queueNames } from './queues';
  * The policy `short` keeps at most one job of a row waiting; retries are not the queue's: the rows that the jobs
  * stand for carry leases of their own, and the worker's sweep queues again what was lost.
  */
-export async function prepareQueues(ownerUrl: string): Promise<void> {
+export async function installQueue(ownerUrl: string): Promise<void> {
   const boss = new PgBoss({ connectionString: ownerUrl, schema: QUEUE_SCHEMA, max: 2, supervise: false, schedule: false });
   let failure: Error | null = null;
   boss.on('error', (error) => (failure = error));
