@@ -92,7 +92,12 @@ export function cieObserver(wavelengthNm: number): [number, number, number] {
   const place = Math.min(last, Math.max(0, (wavelengthNm - FIRST_NM) / STEP_NM));
   const start = Math.min(last - 3, Math.max(0, Math.floor(place) - 1));
   const t = place - start;
-  const weights = [(-(t - 1) * (t - 2) * (t - 3)) / 6, (t * (t - 2) * (t - 3)) / 2, (-t * (t - 1) * (t - 3)) / 2, (t * (t - 1) * (t - 2)) / 6];
+  const weights = [
+    (-(t - 1) * (t - 2) * (t - 3)) / 6,
+    (t * (t - 2) * (t - 3)) / 2,
+    (-t * (t - 1) * (t - 3)) / 2,
+    (t * (t - 1) * (t - 2)) / 6,
+  ];
   const sum: [number, number, number] = [0, 0, 0];
   weights.forEach((weight, index) => {
     const row = TABLE[start + index] as readonly [number, number, number];

@@ -64,7 +64,8 @@ function spectralColour(wavelengthNm: number, level: Level): Triple {
   const hueRad = Math.atan2(b, a);
   let low = 0;
   let high = Math.min(level.chromaCap, Math.hypot(a, b));
-  if (withinGamut(atLuminance(level.luminance, high, hueRad), level.channelCap)) return atLuminance(level.luminance, high, hueRad);
+  if (withinGamut(atLuminance(level.luminance, high, hueRad), level.channelCap))
+    return atLuminance(level.luminance, high, hueRad);
   for (let step = 0; step < BISECTIONS; step += 1) {
     const middle = (low + high) / 2;
     if (withinGamut(atLuminance(level.luminance, middle, hueRad), level.channelCap)) low = middle;

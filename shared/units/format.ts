@@ -4,7 +4,20 @@ export const THIN_SPACE = '\u202f';
 export const NO_VALUE = '–';
 
 const MINUS = '−';
-const MONTHS = ['January', 'February', 'March', 'April', 'May', 'June', 'July', 'August', 'September', 'October', 'November', 'December'];
+const MONTHS = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+];
 
 /** Digits in front of the point in groups of three from five digits on (SI Brochure 5.4.4), with a true minus. */
 function withGroups(plain: string): string {
@@ -24,11 +37,22 @@ function toPlaces(value: number, places: number): string {
 
 /** Decimal places that leave `significant` digits of `value`, after rounding (0.0996 has two in 0.10). */
 function placesOf(value: number, significant: number): number {
-  return significant - 1 - Number(Math.abs(value).toExponential(significant - 1).split('e')[1]);
+  return (
+    significant -
+    1 -
+    Number(
+      Math.abs(value)
+        .toExponential(significant - 1)
+        .split('e')[1],
+    )
+  );
 }
 
 /** A number with a fixed count of decimals or of significant digits (default: 4 significant). */
-export function formatNumber(value: number | null | undefined, digits: { places: number } | { significant: number } = { significant: 4 }): string {
+export function formatNumber(
+  value: number | null | undefined,
+  digits: { places: number } | { significant: number } = { significant: 4 },
+): string {
   if (value === null || value === undefined || !Number.isFinite(value)) return NO_VALUE;
   if ('places' in digits) return toPlaces(value, digits.places);
   return toPlaces(value, value === 0 ? 0 : placesOf(value, digits.significant));
@@ -55,20 +79,31 @@ export function formatMeasured(value: number | null | undefined, uncertainty: nu
 }
 
 /** `100.37 ± 0.11 µm`, or the value with its unit alone when no uncertainty is known. */
-export function formatMeasuredText(value: number | null | undefined, uncertainty: number | null | undefined, unit: string): string {
+export function formatMeasuredText(
+  value: number | null | undefined,
+  uncertainty: number | null | undefined,
+  unit: string,
+): string {
   const text = formatMeasured(value, uncertainty);
   if (text.value === NO_VALUE) return NO_VALUE;
   return (text.uncertainty === null ? text.value : `${text.value} ± ${text.uncertainty}`) + THIN_SPACE + unit;
 }
 
 /** A number with its unit. */
-export function formatQuantity(value: number | null | undefined, unit: string, digits?: { places: number } | { significant: number }): string {
+export function formatQuantity(
+  value: number | null | undefined,
+  unit: string,
+  digits?: { places: number } | { significant: number },
+): string {
   const text = formatNumber(value, digits);
   return text === NO_VALUE ? text : text + THIN_SPACE + unit;
 }
 
 /** A fraction of one as a percentage, `0.031` as `3.1 %`. */
-export function formatPercent(fraction: number | null | undefined, digits: { places: number } | { significant: number } = { significant: 2 }): string {
+export function formatPercent(
+  fraction: number | null | undefined,
+  digits: { places: number } | { significant: number } = { significant: 2 },
+): string {
   return formatQuantity(fraction === null || fraction === undefined ? fraction : fraction * 100, '%', digits);
 }
 
