@@ -22,7 +22,12 @@ const environmentSchema = z
     TOKEN_SECRET: z.string().min(32, 'must have at least 32 characters'),
     /** `1`: demo sign-ins and the fake inbox are shown. */
     DEMO: z.enum(['0', '1', '']).default('0'),
-    SMTP_URL: optional.pipe(z.string().regex(/^smtps?:\/\//, 'must begin with smtp:// or smtps://').optional()),
+    SMTP_URL: optional.pipe(
+      z
+        .string()
+        .regex(/^smtps?:\/\//, 'must begin with smtp:// or smtps://')
+        .optional(),
+    ),
     MAIL_FROM: z.string().min(3).default('Ringwright <no-reply@ringwright.example>'),
     /** Folder of the exported web application. */
     WEB_DIR: z.string().min(1).default('dist/web'),

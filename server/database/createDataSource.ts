@@ -13,7 +13,7 @@ export interface DataSourceLimits {
 }
 
 /** What one process of the application may take from the database. */
-export const applicationLimits: DataSourceLimits = { poolSize: 10, statementTimeoutMs: 30_000 };
+export const applicationLimits: DataSourceLimits = { poolSize: 20, statementTimeoutMs: 30_000 };
 
 /** Waiting longer than this for a connection or a lock is a fault, ms. */
 const WAIT_MS = 10_000;

@@ -1,4 +1,4 @@
-import { Check, Column, Entity, Unique } from 'typeorm';
+import { Check, Column, Entity, Index, Unique } from 'typeorm';
 import { frameStates } from '../../shared/contracts/captures';
 import { oneOf } from './columns';
 import { LaboratoryRow } from './LaboratoryRow';
@@ -20,6 +20,9 @@ export type StoredFrameState = (typeof storedFrameStates)[number];
   'ck_frame_ready',
   "state <> 'ready' or (format is not null and width_px is not null and height_px is not null and bit_depth is not null)",
 )
+@Check('ck_frame_attempts', 'attempts >= 0')
+@Check('ck_frame_lease', '(lease_owner is null) = (lease_until is null)')
+@Index('ix_frame_stored', ['leaseUntil'], { where: "state = 'stored'" })
 export class FrameEntity extends LaboratoryRow {
   /** Null only while the chunks arrive; afterwards it never changes. */
   @Column({ type: 'text', nullable: true }) sha256: string | null;
@@ -41,4 +44,8 @@ export class FrameEntity extends LaboratoryRow {
   /** Part of the pixels at or above white, 0 to 1. */
   @Column({ type: 'double precision', nullable: true }) clippedFraction: number | null;
   @Column({ type: 'double precision', nullable: true }) noiseCounts: number | null;
+  /** How often a worker has taken the inspection up. */
+  @Column({ type: 'integer', default: 0 }) attempts: number;
+  @Column({ type: 'timestamptz', nullable: true }) leaseUntil: Date | null;
+  @Column({ type: 'text', nullable: true }) leaseOwner: string | null;
 }

@@ -10,7 +10,11 @@ import {
   type RefusalReason,
   type Stage,
 } from '../../shared/contracts/measureResult';
-import { measurementStates, type MeasurementSettings, type MeasurementState } from '../../shared/contracts/measurements';
+import {
+  measurementStates,
+  type MeasurementSettings,
+  type MeasurementState,
+} from '../../shared/contracts/measurements';
 import { CaptureFrameEntity } from './CaptureFrameEntity';
 import { ByMember, finiteNotNegative, finitePositive, oneOf } from './columns';
 import { LaboratoryRow } from './LaboratoryRow';

@@ -12,7 +12,10 @@ export type RenditionKind = (typeof renditionKinds)[number];
 @Unique('uq_rendition_frame_kind', ['frameId', 'kind'])
 @Unique('uq_rendition_measurement_kind', ['measurementId', 'kind'])
 @Check('ck_rendition_kind', oneOf('kind', renditionKinds))
-@Check('ck_rendition_owner', "(kind = 'misfit') = (measurement_id is not null) and num_nonnulls(frame_id, measurement_id) = 1")
+@Check(
+  'ck_rendition_owner',
+  "(kind = 'misfit') = (measurement_id is not null) and num_nonnulls(frame_id, measurement_id) = 1",
+)
 @Check('ck_rendition_dimensions', 'width_px > 0 and height_px > 0')
 @Within(() => FrameEntity, 'frameId')
 @Within(() => MeasurementEntity, 'measurementId')

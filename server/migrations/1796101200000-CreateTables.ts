@@ -308,6 +308,9 @@ const statements = [
     peak_fraction double precision,
     clipped_fraction double precision,
     noise_counts double precision,
+    attempts integer not null default 0,
+    lease_until timestamptz,
+    lease_owner text,
     created_at timestamptz not null default now(),
     constraint pk_frame primary key (id),
     constraint uq_frame_laboratory_id unique (laboratory_id, id),
@@ -323,8 +326,11 @@ const statements = [
       check (state <> 'ready' or (
         format is not null and width_px is not null and height_px is not null and bit_depth is not null
       )),
+    constraint ck_frame_attempts check (attempts >= 0),
+    constraint ck_frame_lease check ((lease_owner is null) = (lease_until is null)),
     constraint fk_frame_laboratory_id foreign key (laboratory_id) references laboratory (id)
   )`,
+  `create index ix_frame_stored on frame (lease_until) where state = 'stored'`,
   `create table frame_chunk (
     frame_id uuid not null,
     position integer not null,

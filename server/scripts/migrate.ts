@@ -1,8 +1,11 @@
 import { ConfigError, readOwnerDatabaseUrl } from '../config';
 import { migrateDatabase } from '../database/migrateDatabase';
+import { installQueue } from '../worker/queue/installQueue';
 
 async function main(): Promise<void> {
-  const ran = await migrateDatabase(readOwnerDatabaseUrl());
+  const ownerUrl = readOwnerDatabaseUrl();
+  const ran = await migrateDatabase(ownerUrl);
+  await installQueue(ownerUrl);
   for (const name of ran) console.log(`migrated: ${name}`);
 }
 
