@@ -1,0 +1,4 @@
+/** The name of the screen for the window; a native application has none. */
+export function DocumentTitle(_props: { title: string }) {
+  return null;
+}

@@ -1,0 +1,206 @@
+import type { Href } from 'expo-router';
+import { useMemo, useState, type ReactNode } from 'react';
+import { View } from 'react-native';
+import { Icon } from './Icon';
+import { sortedBy, type SortKey } from './sortedBy';
+import { Text } from './Text';
+import { fontFamily, radius, shell, space, stroke } from './tokens';
+import { Touch } from './Touch';
+import { useLook } from './useLook';
+
+export interface Column<R> {
+  key: string;
+  title: string;
+  /** px; without it the column shares what is left. */
+  width?: number;
+  /** Numbers stand right. */
+  align?: 'left' | 'right';
+  cell: (row: R) => ReactNode;
+  /** What it is sorted by; without it the head cannot be tapped. */
+  sortBy?: (row: R) => SortKey;
+}
+
+export interface TableProps<R> {
+  /** What the table holds, for screen readers. */
+  label: string;
+  columns: readonly Column<R>[];
+  rows: readonly R[];
+  rowKey: (row: R) => string;
+  /** What a screen reader says for a row that can be pressed. */
+  rowLabel?: (row: R) => string;
+  rowHref?: (row: R) => Href;
+  onRowPress?: (row: R) => void;
+  selectedKey?: string | null;
+  /** Rows that need a person are lifted. */
+  isFirst?: (row: R) => boolean;
+  sort?: { key: string; descending: boolean };
+}
+
+/** Rows without lines, 2 px apart; a tap on a head sorts, a second one turns the order. */
+export function Table<R>({
+  label,
+  columns,
+  rows,
+  rowKey,
+  rowLabel,
+  rowHref,
+  onRowPress,
+  selectedKey,
+  isFirst,
+  sort: first,
+}: TableProps<R>) {
+  const { colours, desk } = useLook();
+  const [sort, setSort] = useState(first ?? null);
+  const ordered = useMemo(() => {
+    const by = sort ? columns.find((column) => column.key === sort.key)?.sortBy : undefined;
+    return by && sort ? sortedBy(rows, by, sort.descending) : rows;
+  }, [rows, columns, sort]);
+  const cellStyle = (column: Column<R>) => [
+    column.width ? { width: column.width } : { flex: 1, minWidth: 0 },
+    {
+      justifyContent: 'center' as const,
+      alignItems: column.align === 'right' ? ('flex-end' as const) : ('flex-start' as const),
+    },
+  ];
+  const line = {
+    flexDirection: 'row' as const,
+    gap: space.m,
+    paddingHorizontal: desk ? 20 : space.l,
+    alignItems: 'center' as const,
+  };
+
+  return (
+    <View role="table" aria-label={label} style={{ gap: space.hair }}>
+      <View role="rowgroup">
+        <View role="row" style={[line, { minHeight: 34 }]}>
+          {columns.map((column) => {
+            const sorted = sort?.key === column.key;
+            const title = (
+              <Text
+                variant="label"
+                lines={1}
+                align={column.align}
+                tone={sorted ? 'ink0' : 'ink2'}
+                style={sorted ? { fontFamily: fontFamily.textBold } : null}
+              >
+                {column.title}
+              </Text>
+            );
+            return (
+              <View key={column.key} role="columnheader" style={cellStyle(column)}>
+                {column.sortBy ? (
+                  <Touch
+                    label={`Sort by ${column.title || column.key}${sorted ? (sort.descending ? ', now descending' : ', now ascending') : ''}`}
+                    onPress={() => setSort({ key: column.key, descending: sorted ? !sort.descending : false })}
+                    style={{ minHeight: 34, flexDirection: 'row', alignItems: 'center', gap: 4 }}
+                  >
+                    {sorted && column.align === 'right' ? <SortArrow descending={sort.descending} /> : null}
+                    {title}
+                    {sorted && column.align !== 'right' ? <SortArrow descending={sort.descending} /> : null}
+                  </Touch>
+                ) : (
+                  title
+                )}
+              </View>
+            );
+          })}
+        </View>
+      </View>
+      <View role="rowgroup" style={{ gap: space.hair }}>
+        {ordered.map((row) => {
+          const key = rowKey(row);
+          const chosen = selectedKey === key;
+          const lifted = chosen || isFirst?.(row) === true;
+          const cells = columns.map((column) => {
+            const content = column.cell(row);
+            return (
+              <View key={column.key} role="cell" style={cellStyle(column)}>
+                {typeof content === 'string' || typeof content === 'number' ? (
+                  <Text align={column.align} lines={1}>
+                    {content}
+                  </Text>
+                ) : (
+                  content
+                )}
+              </View>
+            );
+          });
+          const frame = (pressed: boolean) => [
+            line,
+            {
+              minHeight: desk ? shell.rowDesk : 54,
+              paddingVertical: 4,
+              borderRadius: radius.plate,
+              backgroundColor: lifted || pressed ? colours.lift : colours.plate,
+            },
+          ];
+          const bar = chosen ? (
+            <View
+              style={{
+                position: 'absolute',
+                left: 0,
+                top: 0,
+                bottom: 0,
+                width: stroke.bar,
+                backgroundColor: colours.accent,
+              }}
+            />
+          ) : null;
+          if (!rowHref && !onRowPress) {
+            return (
+              <View key={key} role="row" style={frame(false)}>
+                {cells}
+              </View>
+            );
+          }
+          return (
+            <TouchRow
+              key={key}
+              label={rowLabel?.(row)}
+              href={rowHref?.(row)}
+              onPress={onRowPress ? () => onRowPress(row) : undefined}
+              chosen={chosen}
+              frame={frame}
+            >
+              {bar}
+              {cells}
+            </TouchRow>
+          );
+        })}
+      </View>
+    </View>
+  );
+}
+
+function SortArrow({ descending }: { descending: boolean }) {
+  const { colours } = useLook();
+  return (
+    <View style={descending ? null : { transform: [{ rotate: '180deg' }] }}>
+      <Icon name="down" size={12} colour={colours.ink0} strokeWidth={2.5} />
+    </View>
+  );
+}
+
+interface TouchRowProps {
+  label?: string;
+  href?: Href;
+  onPress?: () => void;
+  chosen: boolean;
+  frame: (pressed: boolean) => object[];
+  children: ReactNode;
+}
+
+function TouchRow({ label, href, onPress, chosen, frame, children }: TouchRowProps) {
+  return (
+    <Touch
+      href={href}
+      onPress={onPress}
+      role="row"
+      label={label}
+      selected={chosen}
+      style={({ pressed }) => frame(pressed)}
+    >
+      {children}
+    </Touch>
+  );
+}

@@ -1,0 +1,5 @@
+/** Metro gives a number for a bundled file. */
+declare module '*.ttf' {
+  const source: number;
+  export default source;
+}
