@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { id, instant, note, sha256 } from './common';
 import { endpoint } from './endpoint';
 import { lineProfileQuery, lineProfileSchema } from './lineProfile';
-import { measurementSchema, measurementSettingsSchema } from './measurements';
+import { measurementSchema, settingsChangeSchema } from './measurements';
 import { BENCH, STAFF } from './roles';
 
 export const frameKinds = ['light', 'dark', 'flat'] as const;
@@ -105,7 +105,7 @@ export const captureEndpoints = {
   placeKnown: endpoint({ method: 'post', path: '/captures/:captureId/frames/known', summary: 'Put frames the laboratory already holds into the capture; answers with the hashes still to be sent', access: BENCH, params: captureParams, body: z.object({ files: z.array(z.object({ name: z.string().min(1).max(255), kind: z.enum(frameKinds), sha256 })).min(1).max(1000) }), answer: z.object({ missing: z.array(sha256) }), status: 200 }),
   upload: endpoint({ method: 'post', path: '/captures/:captureId/frames', summary: 'Send one frame; a light is measured by itself once it is stored', access: BENCH, params: captureParams, body: uploadFields, multipart: true, answer: captureFrameSchema }),
   updatePlace: endpoint({ method: 'patch', path: '/captures/:captureId/frames/:captureFrameId', summary: 'Change what a frame is, or leave it out', access: BENCH, params: placeParams, body: z.object({ kind: z.enum(frameKinds).optional(), leftOut: z.boolean().optional() }), answer: captureFrameSchema }),
-  measureCapture: endpoint({ method: 'post', path: '/captures/:captureId/measurements', summary: 'Measure every light that has no run, or whose run used fewer darks than there are now', access: BENCH, params: captureParams, body: measurementSettingsSchema.partial(), answer: z.object({ queued: z.number().int() }) }),
+  measureCapture: endpoint({ method: 'post', path: '/captures/:captureId/measurements', summary: 'Measure every light that has no run, or whose run used fewer darks than there are now', access: BENCH, params: captureParams, body: settingsChangeSchema, answer: z.object({ queued: z.number().int() }) }),
   original: endpoint({ method: 'get', path: '/frames/:frameId/original', summary: 'The file as it came, byte for byte', access: STAFF, params: frameParams, kind: 'bytes' }),
   thumbnail: endpoint({ method: 'get', path: '/frames/:frameId/thumbnail', summary: 'A small picture in the own colour of a wavelength', access: STAFF, params: frameParams, query: z.object({ theme: z.enum(['dark', 'light']).default('dark'), wavelengthNm: z.coerce.number().min(200).max(2000).optional() }), kind: 'png' }),
   plane: endpoint({ method: 'get', path: '/frames/:frameId/plane', summary: 'Decoded counts, 16-bit little-endian, rows from the top; X-Width, X-Height, X-Black and X-White say the rest', access: STAFF, params: frameParams, kind: 'bytes' }),

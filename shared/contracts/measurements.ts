@@ -15,6 +15,11 @@ export const measurementSettingsSchema = z.object({
   useDarks: z.boolean().default(true),
 });
 export type MeasurementSettings = z.output<typeof measurementSettingsSchema>;
+/** What is to differ from the settings of the run before; what is left out stays as it was. */
+export const settingsChangeSchema = z
+  .object({ pattern: z.enum(patterns), mosaic: z.enum(mosaics), encoding: z.enum(encodings), useDarks: z.boolean() })
+  .partial();
+export type SettingsChange = z.output<typeof settingsChangeSchema>;
 
 /** A measurement in a list. */
 export const measurementSchema = z.object({
@@ -99,7 +104,7 @@ const csvQuery = z.object({});
 export const measurementEndpoints = {
   measurements: endpoint({ method: 'get', path: '/measurements', summary: 'Measurements, newest first', access: STAFF, query: z.object({ lotId: id.optional(), apertureId: id.optional(), state: z.enum(measurementStates).optional(), newestOnly: z.stringbool().default(true), limit: z.coerce.number().int().min(1).max(500).default(200) }), answer: z.array(measurementSchema) }),
   measurement: endpoint({ method: 'get', path: '/measurements/:measurementId', summary: 'A measurement with its result', access: STAFF, params, answer: measurementDetailSchema }),
-  measureAgain: endpoint({ method: 'post', path: '/measurements/:measurementId/again', summary: 'Measure the same frame again, with other settings if given; the old run stays', access: BENCH, params, body: measurementSettingsSchema.partial(), answer: measurementSchema }),
+  measureAgain: endpoint({ method: 'post', path: '/measurements/:measurementId/again', summary: 'Measure the same frame again, with other settings if given; the old run stays', access: BENCH, params, body: settingsChangeSchema, answer: measurementSchema }),
   radialProfile: endpoint({ method: 'get', path: '/measurements/:measurementId/radial-profile', summary: 'Radial profile with standard errors and the fitted model', access: STAFF, params, answer: radialProfileSchema }),
   radialProfileCsv: endpoint({ method: 'get', path: '/measurements/:measurementId/radial-profile.csv', summary: 'The radial profile as CSV', access: STAFF, params, query: csvQuery, kind: 'csv' }),
   ringTableCsv: endpoint({ method: 'get', path: '/measurements/:measurementId/rings.csv', summary: 'The ring table as CSV', access: STAFF, params, query: csvQuery, kind: 'csv' }),
