@@ -1,0 +1,99 @@
+import type { FrameHealth } from '../../shared/contracts/captures';
+import type { CameraRecord } from '../../shared/contracts/measureCase';
+import { clipLevel } from './calibrate/clipLevel';
+import { trimmedVariance } from './calibrate/masterFrame';
+import { decodeFrame } from './decode/decodeFrame';
+import type { DecodedFrame } from './decode/DecodedFrame';
+import { thumbnailTone } from './thumbnailTone';
+
+export { FrameProblem } from './decode/FrameProblem';
+
+export interface FrameInspection {
+  format: string;
+  widthPx: number;
+  heightPx: number;
+  bitDepth: number;
+  exposureMs: number | null;
+  health: FrameHealth;
+  /** Decoded counts, row-major. */
+  plane: Uint16Array;
+  /** Logarithmic tone 0 to 255, longest side 192. */
+  thumbnailTone: { widthPx: number; heightPx: number; bytes: Uint8Array };
+}
+
+/**
+ * Decodes a frame as soon as it arrives and says whether it is fit to be measured.
+ * @throws FrameProblem when the file cannot be used, in words that say what to send instead
+ */
+export async function inspectFrame(bytes: Buffer, camera: CameraRecord): Promise<FrameInspection> {
+  const decoded = await decodeFrame(bytes, camera);
+  const { widthPx, heightPx, bitDepth } = decoded;
+  const plane = integerPlane(decoded);
+  const health = frameHealth(decoded, plane, camera);
+  return {
+    format: decoded.format,
+    widthPx,
+    heightPx,
+    bitDepth: Math.min(16, bitDepth),
+    exposureMs: decoded.exposureMs,
+    health,
+    plane,
+    thumbnailTone: thumbnailTone(plane, widthPx, heightPx, health.blackCount, health.peakCounts),
+  };
+}
+
+/** Counts as 16-bit integers; samples of a wider or floating kind are scaled so that their range fits. */
+function integerPlane(decoded: DecodedFrame): Uint16Array {
+  if (decoded.data instanceof Uint16Array) return decoded.data;
+  let low = Infinity;
+  let high = -Infinity;
+  for (const value of decoded.data) {
+    if (value < low) low = value;
+    if (value > high) high = value;
+  }
+  const fits = low >= 0 && high <= 65_535 && high > 255;
+  const offset = fits ? 0 : low;
+  const scale = fits ? 1 : high > low ? 65_535 / (high - low) : 1;
+  return Uint16Array.from(decoded.data, (value) => Math.round((value - offset) * scale));
+}
+
+function frameHealth(decoded: DecodedFrame, plane: Uint16Array, camera: CameraRecord): FrameHealth {
+  const histogram = new Uint32Array(65_536);
+  for (let i = 0; i < plane.length; i++) histogram[plane[i]]++;
+  const level = (part: number) => {
+    let sum = 0;
+    for (let v = 0; v < histogram.length; v++) {
+      sum += histogram[v];
+      if (sum >= part * plane.length) return v;
+    }
+    return 65_535;
+  };
+  const nominal = camera.whiteCount ?? decoded.whiteCount ?? 2 ** Math.min(16, decoded.bitDepth) - 1;
+  const { clipCount } = clipLevel(plane, nominal);
+  const blackCount = camera.blackCount ?? decoded.blackCount ?? level(0.02);
+  const peakCounts = Math.max(0, level(0.9999) - blackCount);
+  let clipped = 0;
+  for (let v = Math.ceil(clipCount); v < histogram.length; v++) clipped += histogram[v];
+  return {
+    blackCount,
+    whiteCount: clipCount,
+    peakCounts,
+    peakFraction: Math.min(1, peakCounts / Math.max(1, clipCount - blackCount)),
+    clippedFraction: clipped / plane.length,
+    noiseCounts: quietNoise(plane, decoded.widthPx, decoded.heightPx, level(0.25), decoded.mosaic === null ? 1 : 2),
+  };
+}
+
+/** Standard deviation of one pixel among the darker quarter, from second differences along rows. */
+function quietNoise(plane: Uint16Array, widthPx: number, heightPx: number, below: number, step: number): number {
+  const skip = Math.max(1, Math.floor((widthPx * heightPx) / 200_000));
+  const differences: number[] = [];
+  for (let y = 0; y < heightPx; y++) {
+    for (let x = step + (y % skip); x < widthPx - step; x += skip) {
+      const i = y * widthPx + x;
+      const sum = plane[i - step] + plane[i] + plane[i + step];
+      if (sum <= 3 * below) differences.push(plane[i - step] - 2 * plane[i] + plane[i + step]);
+    }
+  }
+  return differences.length < 20 ? 0 : Math.sqrt(trimmedVariance(differences) / 6);
+}
