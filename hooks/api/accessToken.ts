@@ -1,5 +1,4 @@
-import { accountEndpoints } from '@/shared/contracts/accounts';
-import { sessionSchema, type Session } from '@/shared/contracts/accounts';
+import { accountEndpoints, sessionSchema, type Session } from '@/shared/contracts/accounts';
 import { ApiProblem, networkProblem, problemFrom } from './ApiProblem';
 import { alone } from './alone';
 import { urlOf } from './urlOf';
@@ -34,6 +33,13 @@ export function onSessionChange(listener: (session: Session | null) => void): ()
 export function keepSession(session: Session | null): void {
   held = session === null ? null : { session, endsAtMs: Date.now() + session.expiresInSeconds * 1000 };
   for (const listener of listeners) listener(session);
+}
+
+/** Shows another name for the person signed in; the token and its end stay. */
+export function renameKeptUser(user: Session['user']): void {
+  if (held === null) return;
+  held = { ...held, session: { ...held.session, user } };
+  for (const listener of listeners) listener(held.session);
 }
 
 async function askForSession(): Promise<Session | null> {

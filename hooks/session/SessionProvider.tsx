@@ -1,4 +1,4 @@
-import { createContext, useCallback, useContext, useEffect, useMemo, useState, type ReactNode } from 'react';
+import { createContext, useCallback, useContext, useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
 import { accountEndpoints, type Session } from '@/shared/contracts/accounts';
 import type { BodyInputOf } from '@/shared/contracts/endpoint';
 import type { Role } from '@/shared/contracts/roles';
@@ -11,7 +11,8 @@ import { announceSessionChange, onSessionChangeElsewhere } from './otherTabs';
 export type SessionState =
   | { status: 'asking' }
   | { status: 'unreachable'; problem: ApiProblem }
-  | { status: 'signed-out' }
+  /** `byHand`: the person signed out in this tab, so that the next one does not land on their screen. */
+  | { status: 'signed-out'; byHand: boolean }
   | { status: 'signed-in'; session: Session };
 
 export interface SessionActions {
@@ -34,6 +35,8 @@ export function SessionProvider({ children }: { children: ReactNode }) {
     return session ? { status: 'signed-in', session } : { status: 'asking' };
   });
 
+  const leaving = useRef(false);
+
   const ask = useCallback(() => {
     renewAccessToken().catch((error: unknown) => {
       const problem =
@@ -45,9 +48,10 @@ export function SessionProvider({ children }: { children: ReactNode }) {
   }, []);
 
   useEffect(() => {
-    const stop = onSessionChange((session) =>
-      setState(session ? { status: 'signed-in', session } : { status: 'signed-out' }),
-    );
+    const stop = onSessionChange((session) => {
+      setState(session ? { status: 'signed-in', session } : { status: 'signed-out', byHand: leaving.current });
+      leaving.current = false;
+    });
     const stopElsewhere = onSessionChangeElsewhere((change) => {
       if (change === 'signed-out') keepSession(null);
       else ask();
@@ -70,6 +74,7 @@ export function SessionProvider({ children }: { children: ReactNode }) {
       accept: async (body) => begin(await call(accountEndpoints.acceptInvitation, { body })),
       signOut: async () => {
         await call(accountEndpoints.signOut);
+        leaving.current = true;
         keepSession(null);
         announceSessionChange('signed-out');
       },

@@ -1,24 +1,25 @@
 export type SessionChange = 'signed-in' | 'signed-out';
 
-const channelName = 'ringwright-session';
+/** One channel for the page: what it sends reaches the other tabs and not itself. */
+let channel: BroadcastChannel | null | undefined;
 
-function open(): BroadcastChannel | null {
-  return typeof BroadcastChannel === 'undefined' ? null : new BroadcastChannel(channelName);
+function sharedChannel(): BroadcastChannel | null {
+  channel ??= typeof BroadcastChannel === 'undefined' ? null : new BroadcastChannel('ringwright-session');
+  return channel;
 }
 
 /** Tells the other tabs of this browser that somebody signed in or out. */
 export function announceSessionChange(change: SessionChange): void {
-  const channel = open();
-  channel?.postMessage(change);
-  channel?.close();
+  sharedChannel()?.postMessage(change);
 }
 
 /** Hears of changes in other tabs; returns how to stop. */
 export function onSessionChangeElsewhere(listener: (change: SessionChange) => void): () => void {
-  const channel = open();
-  if (channel === null) return () => undefined;
-  channel.onmessage = (event: MessageEvent<unknown>) => {
+  const shared = sharedChannel();
+  if (shared === null) return () => undefined;
+  const hear = (event: MessageEvent<unknown>) => {
     if (event.data === 'signed-in' || event.data === 'signed-out') listener(event.data);
   };
-  return () => channel.close();
+  shared.addEventListener('message', hear);
+  return () => shared.removeEventListener('message', hear);
 }

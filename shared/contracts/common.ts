@@ -17,16 +17,18 @@ export const shortText = (what: string, max = 80) =>
     .max(max, `Keep ${what} within ${max} characters.`);
 export const note = z.string().trim().max(2000, 'Keep the note within 2000 characters.');
 
+const midSentence = (what: string) => what.charAt(0).toLowerCase() + what.slice(1);
+
 /** A quantity that must be above zero; the message names it with its unit. */
 export const positive = (what: string, unit: string, max: number) =>
   z
-    .number({ error: `Enter ${what} in ${unit} as a number.` })
+    .number({ error: `Enter ${midSentence(what)} in ${unit} as a number.` })
     .gt(0, `${what} must be more than 0 ${unit}.`)
     .max(max, `${what} must be at most ${max} ${unit}.`);
 /** A quantity that may be zero. */
 export const notNegative = (what: string, unit: string, max: number) =>
   z
-    .number({ error: `Enter ${what} in ${unit} as a number.` })
+    .number({ error: `Enter ${midSentence(what)} in ${unit} as a number.` })
     .min(0, `${what} cannot be negative.`)
     .max(max, `${what} must be at most ${max} ${unit}.`);
 
