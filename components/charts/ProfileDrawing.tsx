@@ -40,13 +40,10 @@ export function ProfileDrawing({
       const axis = { zeroX: plot.left, pxPerMm: plot.width / reach };
       const series = profileSeries(profile, axis.pxPerMm);
       const strip = { left: plot.left, top: height - MISFIT_PX, width: plot.width, height: MISFIT_PX };
-      if (misfit) drawMisfitStrip(pen, colours, strip, axis, series, reach);
       const tags = dark.flatMap((ring) => radiusXs(axis, ring.radiusMm, plot).map((x) => ({ order: ring.order, x })));
-      for (const tag of tags) {
-        const chosen = tag.order === chosenOrder;
-        drawPlumb(pen, colours, tag.x, TAGS_PX, foot, chosen);
-        if (misfit) drawPlumb(pen, colours, tag.x, strip.top, height, chosen);
-      }
+      const plumbs = tags.map(({ order, x }) => ({ x, chosen: order === chosenOrder }));
+      if (misfit) drawMisfitStrip(pen, colours, strip, axis, series, reach, plumbs);
+      for (const plumb of plumbs) drawPlumb(pen, colours, plumb.x, TAGS_PX, foot, plumb.chosen);
       drawProfile(pen, colours, { plot, axis, series, range, reachMm: reach });
       drawRingTags(pen, colours, { left: 0, top: 0, width, height: TAGS_PX }, tags, chosenOrder);
       pen.text('Ring', 8, TAGS_PX / 2 + 4.5, { color: colours.ink2 });

@@ -140,6 +140,7 @@ export function drawMisfitStrip(
   axis: RadialAxis,
   series: ProfileSeries,
   reachMm: number,
+  plumbs: readonly { x: number; chosen: boolean }[],
 ): void {
   const y = linearScale(-MISFIT_SPAN, MISFIT_SPAN, bottom(box), box.top);
   const end = Math.min(right(box), axis.zeroX + reachMm * axis.pxPerMm);
@@ -157,6 +158,7 @@ export function drawMisfitStrip(
   pen.text('+2', box.left - 8, y(2) + 4, { color: colours.ink2, anchor: 'end' });
   pen.text('−2', box.left - 8, y(-2) + 4, { color: colours.ink2, anchor: 'end' });
 
+  for (const plumb of plumbs) drawPlumb(pen, colours, plumb.x, box.top, bottom(box), plumb.chosen);
   let pinned = 0;
   let worst = 0;
   let worstX = 0;

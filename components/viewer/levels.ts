@@ -74,3 +74,18 @@ export function moveLevel(levels: Levels, which: keyof Levels, count: number, wh
     ? { ...levels, low: Math.min(Math.max(rounded, whole.low), levels.high - gap) }
     : { ...levels, high: Math.max(Math.min(rounded, whole.high), levels.low + gap) };
 }
+
+/**
+ * Noise of a dark pixel in counts, from the pixels below black: half of a symmetric spread. At least 1; 2 where too few
+ * pixels lie below black to tell.
+ */
+export function noiseFloor(table: Uint32Array, blackCount: number): number {
+  let pixels = 0;
+  let squares = 0;
+  for (let count = 0; count < Math.min(blackCount, table.length); count += 1) {
+    const n = table[count]!;
+    pixels += n;
+    squares += n * (count - blackCount) ** 2;
+  }
+  return pixels < 100 ? 2 : Math.max(1, Math.sqrt(squares / pixels));
+}
