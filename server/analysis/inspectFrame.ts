@@ -1,4 +1,5 @@
-import type { FrameHealth } from '../../shared/contracts/captures';
+import type { z } from 'zod';
+import type { frameHealthSchema } from '../../shared/contracts/captures';
 import type { CameraRecord } from '../../shared/contracts/measureCase';
 import { clipLevel } from './calibrate/clipLevel';
 import { trimmedVariance } from './calibrate/masterFrame';
@@ -6,7 +7,7 @@ import { decodeFrame } from './decode/decodeFrame';
 import type { DecodedFrame } from './decode/DecodedFrame';
 import { thumbnailTone } from './thumbnailTone';
 
-export { FrameProblem } from './decode/FrameProblem';
+type FrameHealth = z.infer<typeof frameHealthSchema>;
 
 export interface FrameInspection {
   format: string;
