@@ -65,7 +65,15 @@ export function AgainForm({ settings, busy, problem, onMeasure, onClose }: Again
         ) : null}
         <View style={{ flexDirection: 'row', gap: space.hair }}>
           <Button label="Close" kind="quiet" onPress={onClose} />
-          <Button label="Measure again" kind="primary" icon="retry" trailing={null} busy={busy} onPress={() => onMeasure(chosen)} style={{ flex: 1 }} />
+          <Button
+            label="Measure again"
+            kind="primary"
+            icon="retry"
+            trailing={null}
+            busy={busy}
+            onPress={() => onMeasure(chosen)}
+            style={{ flex: 1 }}
+          />
         </View>
       </View>
     </Plate>

@@ -27,7 +27,13 @@ export function leadSentence(budget: readonly BudgetLine[], standardUncertaintyU
 }
 
 /** Contributions to the standard uncertainty by cause, sorted, the largest in accent. */
-export function BudgetBars({ budget, standardUncertaintyUm, expandedUncertaintyUm, coverageFactor, effectiveDegreesOfFreedom }: BudgetBarsProps) {
+export function BudgetBars({
+  budget,
+  standardUncertaintyUm,
+  expandedUncertaintyUm,
+  coverageFactor,
+  effectiveDegreesOfFreedom,
+}: BudgetBarsProps) {
   const { colours, desk } = useLook();
   const lines = [...budget].sort((a, b) => b.contributionUm - a.contributionUm);
   const most = Math.max(lines[0]?.contributionUm ?? 0, 1e-12);
@@ -39,7 +45,11 @@ export function BudgetBars({ budget, standardUncertaintyUm, expandedUncertaintyU
     <Section title="Uncertainty by cause" note="Standard uncertainty of the size, µm">
       <View role="list">
         {lines.map((line, i) => (
-          <View key={line.source} role="listitem" style={{ height: rowHeight, flexDirection: 'row', alignItems: 'center' }}>
+          <View
+            key={line.source}
+            role="listitem"
+            style={{ height: rowHeight, flexDirection: 'row', alignItems: 'center' }}
+          >
             <Text variant="small" style={{ width: desk ? 104 : 112 }}>
               {sourceName(line.source)}
             </Text>
@@ -60,11 +70,15 @@ export function BudgetBars({ budget, standardUncertaintyUm, expandedUncertaintyU
         ))}
       </View>
       <View style={{ height: 1, backgroundColor: colours.ink3, marginTop: 4, marginBottom: 2 }} />
-      <View style={{ flexDirection: 'row', justifyContent: 'space-between', minHeight: rowHeight, alignItems: 'center' }}>
+      <View
+        style={{ flexDirection: 'row', justifyContent: 'space-between', minHeight: rowHeight, alignItems: 'center' }}
+      >
         <Text variant="small">All together</Text>
         <Text variant="small">{number(standardUncertaintyUm, places)}</Text>
       </View>
-      <View style={{ flexDirection: 'row', justifyContent: 'space-between', minHeight: rowHeight, alignItems: 'center' }}>
+      <View
+        style={{ flexDirection: 'row', justifyContent: 'space-between', minHeight: rowHeight, alignItems: 'center' }}
+      >
         <Text variant="small" tone="ink0" style={{ fontFamily: fontFamily.textBold }}>
           {`Times ${formatNumber(coverageFactor, { places: 2 })}, for 95 %`}
         </Text>

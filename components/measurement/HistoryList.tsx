@@ -13,17 +13,29 @@ export function HistoryList({ measurement }: { measurement: MeasurementDetail })
   const { colours, desk } = useLook();
   return (
     <View>
-      <View style={{ backgroundColor: colours.plate, paddingHorizontal: desk ? 20 : space.l, paddingTop: 12, paddingBottom: 6 }}>
+      <View
+        style={{
+          backgroundColor: colours.plate,
+          paddingHorizontal: desk ? 20 : space.l,
+          paddingTop: 12,
+          paddingBottom: 6,
+        }}
+      >
         <Text variant="section" level={2}>
           History
         </Text>
         <Text variant="label">
-          {measurement.history.length === 1 ? 'The only run of this frame' : `${measurement.history.length} runs of this frame`}
+          {measurement.history.length === 1
+            ? 'The only run of this frame'
+            : `${measurement.history.length} runs of this frame`}
         </Text>
       </View>
       <View style={{ gap: space.hair }}>
         {measurement.history.map((run) => {
-          const size = run.sizeUm === null ? stateWord(run.state, null) : formatMeasuredText(run.sizeUm, run.expandedUncertaintyUm, 'µm');
+          const size =
+            run.sizeUm === null
+              ? stateWord(run.state, null)
+              : formatMeasuredText(run.sizeUm, run.expandedUncertaintyUm, 'µm');
           const darks = run.darkCount === 1 ? '1 dark' : `${run.darkCount} darks`;
           return (
             <Row

@@ -23,7 +23,11 @@ export function RefusedAnswer({ state, reason, message }: RefusedAnswerProps) {
     <View style={{ gap: space.hair }}>
       <Plate>
         <View style={{ flexDirection: 'row', alignItems: 'center', gap: 14 }}>
-          {state === 'refused' ? <VerdictGlyph verdict="refused" scale={1.4} /> : <StageGlyph stage="failed" size={28} />}
+          {state === 'refused' ? (
+            <VerdictGlyph verdict="refused" scale={1.4} />
+          ) : (
+            <StageGlyph stage="failed" size={28} />
+          )}
           <Text variant="title" level={2} style={{ fontSize: 25, lineHeight: 30, flexShrink: 1 }}>
             {name}
           </Text>
@@ -37,7 +41,14 @@ export function RefusedAnswer({ state, reason, message }: RefusedAnswerProps) {
           <View
             key={step}
             role="listitem"
-            style={{ backgroundColor: colours.plate, flexDirection: 'row', alignItems: 'center', minHeight: 56, paddingVertical: 10, paddingRight: space.l }}
+            style={{
+              backgroundColor: colours.plate,
+              flexDirection: 'row',
+              alignItems: 'center',
+              minHeight: 56,
+              paddingVertical: 10,
+              paddingRight: space.l,
+            }}
           >
             <Text variant="medium" align="center" style={{ width: desk ? 56 : 44, fontSize: 22 }}>
               {i + 1}

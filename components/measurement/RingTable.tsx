@@ -72,7 +72,16 @@ export function RingTable({ rings, expandedUncertaintyUm, chosenOrder, onChooseR
           const cells = (
             <>
               {chosen ? (
-                <View style={{ position: 'absolute', left: -8, top: 0, bottom: 0, width: stroke.bar, backgroundColor: colours.accent }} />
+                <View
+                  style={{
+                    position: 'absolute',
+                    left: -8,
+                    top: 0,
+                    bottom: 0,
+                    width: stroke.bar,
+                    backgroundColor: colours.accent,
+                  }}
+                />
               ) : null}
               <View role="cell" style={{ width: phone ? 62 : 58 }}>
                 <Text variant={phone ? 'body' : 'small'} tone={chosen ? 'ink0' : 'ink1'}>

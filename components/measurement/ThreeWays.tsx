@@ -21,7 +21,12 @@ interface Way {
 export function waysOf(result: Measured): Way[] {
   return [
     { name: 'Whole pattern', sizeUm: result.sizeUm, uncertaintyUm: result.fitUncertaintyUm, reason: null },
-    { name: 'Dark rings', sizeUm: result.ringSizeUm, uncertaintyUm: result.ringSizeUncertaintyUm, reason: 'too few dark rings' },
+    {
+      name: 'Dark rings',
+      sizeUm: result.ringSizeUm,
+      uncertaintyUm: result.ringSizeUncertaintyUm,
+      reason: 'too few dark rings',
+    },
     {
       name: 'Transform',
       sizeUm: result.secondOpinion.sizeUm,
@@ -81,7 +86,10 @@ export function ThreeWays({ result }: { result: Measured }) {
           style={{ flex: 1, height }}
           role="img"
           aria-label={ways
-            .map((way) => `${way.name}: ${way.sizeUm === null ? `none, ${way.reason ?? 'not to be had'}` : formatMeasuredText(way.sizeUm, way.uncertaintyUm, 'µm')}`)
+            .map(
+              (way) =>
+                `${way.name}: ${way.sizeUm === null ? `none, ${way.reason ?? 'not to be had'}` : formatMeasuredText(way.sizeUm, way.uncertaintyUm, 'µm')}`,
+            )
             .join('; ')}
           onLayout={(event) => setWidth(event.nativeEvent.layout.width)}
         >
@@ -130,7 +138,12 @@ export function ThreeWays({ result }: { result: Measured }) {
       <View style={{ flexDirection: 'row', marginLeft: labelWidth, marginRight: numberWidth, height: 22 }}>
         {width > 0
           ? [low, high].map((limit) => (
-              <Text key={limit} variant="label" align="center" style={{ position: 'absolute', top: 4, width: 80, left: x(limit) - 40 }}>
+              <Text
+                key={limit}
+                variant="label"
+                align="center"
+                style={{ position: 'absolute', top: 4, width: 80, left: x(limit) - 40 }}
+              >
                 {formatNumber(limit, { places })}
               </Text>
             ))

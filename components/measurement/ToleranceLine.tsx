@@ -20,7 +20,8 @@ const sentence = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 /** Decimals that both limits need, so that 99.5 is not drawn as 100. */
 function decimalsOf(...limits: number[]): number {
   for (let decimals = 0; decimals < 4; decimals++) {
-    if (limits.every((limit) => Math.abs(limit * 10 ** decimals - Math.round(limit * 10 ** decimals)) < 1e-6)) return decimals;
+    if (limits.every((limit) => Math.abs(limit * 10 ** decimals - Math.round(limit * 10 ** decimals)) < 1e-6))
+      return decimals;
   }
   return 4;
 }

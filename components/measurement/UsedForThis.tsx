@@ -37,7 +37,12 @@ export function UsedForThis({ measurement }: { measurement: MeasurementDetail })
     ['Camera', measurement.cameraName],
     ['Pixel pitch', formatMeasuredText(inputs.pixelPitchUm, given.pixelPitchUm, 'µm')],
     ...(glass > 0
-      ? [['Cover glass', `${formatQuantity(glass, 'mm')}, index ${formatNumber(inputs.camera.coverGlassIndex ?? 1.5)}`] as [string, string]]
+      ? [
+          [
+            'Cover glass',
+            `${formatQuantity(glass, 'mm')}, index ${formatNumber(inputs.camera.coverGlassIndex ?? 1.5)}`,
+          ] as [string, string],
+        ]
       : []),
     ['Darks', settings.useDarks ? (measurement.darkCount === 0 ? 'None' : String(measurement.darkCount)) : 'Not used'],
     ...(measured
@@ -45,7 +50,9 @@ export function UsedForThis({ measurement }: { measurement: MeasurementDetail })
           ['Model', modelNames[measured.model] ?? measured.model] as [string, string],
           ...(measured.reducedChiSquare === null
             ? []
-            : [['Fit', `${formatNumber(measured.reducedChiSquare, { places: 2 })}, expected 1.00`] as [string, string]]),
+            : [
+                ['Fit', `${formatNumber(measured.reducedChiSquare, { places: 2 })}, expected 1.00`] as [string, string],
+              ]),
           ...(measured.fresnelNumber === null
             ? []
             : [['Fresnel number', formatNumber(measured.fresnelNumber, { significant: 2 })] as [string, string]]),

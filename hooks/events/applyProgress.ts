@@ -11,7 +11,11 @@ const GATHER_MS = 150;
  * Carries progress into what is on the screen: state and stage at once, everything else by reading it again.
  * @returns a function that takes events, and one that gives up what it still meant to read.
  */
-export function applyProgress(client: QueryClient): { take: (event: ProgressEvent) => void; readAll: () => void; stop: () => void } {
+export function applyProgress(client: QueryClient): {
+  take: (event: ProgressEvent) => void;
+  readAll: () => void;
+  stop: () => void;
+} {
   const captureIds = new Set<string>();
   const measurementIds = new Set<string>();
   let lists = false;
@@ -37,15 +41,17 @@ export function applyProgress(client: QueryClient): { take: (event: ProgressEven
   function take(event: ProgressEvent): void {
     if (event.type === 'measurement') {
       const { state, stage, measurementId } = event;
-      client.setQueryData<CaptureDetail>(captureKeys.detail(event.captureId), (capture) =>
-        capture && {
-          ...capture,
-          frames: capture.frames.map((frame) =>
-            frame.measurement?.id === measurementId && frame.measurement.finishedAt === null
-              ? { ...frame, measurement: { ...frame.measurement, state, stage } }
-              : frame,
-          ),
-        },
+      client.setQueryData<CaptureDetail>(
+        captureKeys.detail(event.captureId),
+        (capture) =>
+          capture && {
+            ...capture,
+            frames: capture.frames.map((frame) =>
+              frame.measurement?.id === measurementId && frame.measurement.finishedAt === null
+                ? { ...frame, measurement: { ...frame.measurement, state, stage } }
+                : frame,
+            ),
+          },
       );
       client.setQueryData<MeasurementDetail>(measurementKeys.detail(measurementId), (measurement) =>
         measurement && measurement.finishedAt === null ? { ...measurement, state, stage } : measurement,

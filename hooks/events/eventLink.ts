@@ -27,7 +27,12 @@ export interface EventLink {
 
 /** Keeps a stream of events open: opens it again after a break, waits longer each time, and polls where there is none. */
 export function eventLink(options: EventLinkOptions): EventLink {
-  const { waitsMs = [500, 1000, 2000, 5000, 10_000, 20_000], patience = 3, pollMs = 4000, silenceMs = 40_000 } = options;
+  const {
+    waitsMs = [500, 1000, 2000, 5000, 10_000, 20_000],
+    patience = 3,
+    pollMs = 4000,
+    silenceMs = 40_000,
+  } = options;
   let controller: AbortController | null = null;
   let state: LinkState = 'idle';
   let failures = 0;

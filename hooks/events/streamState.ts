@@ -16,7 +16,11 @@ export function setStreamState(next: LinkState): void {
 
 /** Whether what moves has to be asked for instead of being told. */
 export function useStreamIsDown(): boolean {
-  return useSyncExternalStore(subscribe, () => state !== 'live', () => true);
+  return useSyncExternalStore(
+    subscribe,
+    () => state !== 'live',
+    () => true,
+  );
 }
 
 /** How often to ask again for something that is moving, ms: now and then even under a stream, in case an event was lost. */

@@ -31,7 +31,8 @@ const captureQuery = (captureId: string) =>
 /** Whether something in the capture is still to come by itself. */
 export function isCaptureMoving(capture: CaptureDetail): boolean {
   return capture.frames.some(
-    ({ state, measurement }) => state === 'stored' || measurement?.state === 'waiting' || measurement?.state === 'measuring',
+    ({ state, measurement }) =>
+      state === 'stored' || measurement?.state === 'waiting' || measurement?.state === 'measuring',
   );
 }
 
@@ -51,7 +52,8 @@ export function useCapture(captureId: string) {
 export function useCreateCapture() {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (body: { apertureId: string; benchId: string; note?: string }) => call(captureEndpoints.createCapture, { body }),
+    mutationFn: (body: { apertureId: string; benchId: string; note?: string }) =>
+      call(captureEndpoints.createCapture, { body }),
     onSuccess: (capture) => {
       client.setQueryData(captureKeys.detail(capture.id), capture);
       void client.invalidateQueries({ queryKey: captureKeys.lists });
@@ -66,8 +68,10 @@ export function useUpdatePlace(captureId: string) {
     mutationFn: ({ captureFrameId, ...body }: { captureFrameId: string; kind?: FrameKind; leftOut?: boolean }) =>
       call(captureEndpoints.updatePlace, { params: { captureId, captureFrameId }, body }),
     onSuccess: (place) => {
-      client.setQueryData(captureQuery(captureId).queryKey, (capture) =>
-        capture && { ...capture, frames: capture.frames.map((frame) => (frame.id === place.id ? place : frame)) },
+      client.setQueryData(
+        captureQuery(captureId).queryKey,
+        (capture) =>
+          capture && { ...capture, frames: capture.frames.map((frame) => (frame.id === place.id ? place : frame)) },
       );
     },
     onSettled: () => client.invalidateQueries({ queryKey: captureKeys.all }),

@@ -50,7 +50,8 @@ export function useMeasurement(measurementId: string) {
 export function useRadialProfile(measurementId: string | null) {
   return useQuery({
     queryKey: measurementKeys.profile(measurementId ?? ''),
-    queryFn: ({ signal }) => call(measurementEndpoints.radialProfile, { params: { measurementId: measurementId ?? '' }, signal }),
+    queryFn: ({ signal }) =>
+      call(measurementEndpoints.radialProfile, { params: { measurementId: measurementId ?? '' }, signal }),
     enabled: measurementId !== null,
     staleTime: Infinity,
   });
@@ -73,6 +74,7 @@ export function useMeasureAgain(measurementId: string) {
 /** Fetches the tables of a measurement as CSV text. */
 export function useMeasurementCsv(measurementId: string) {
   return useMutation({
-    mutationFn: (table: 'radialProfileCsv' | 'ringTableCsv') => callText(measurementEndpoints[table], { params: { measurementId } }),
+    mutationFn: (table: 'radialProfileCsv' | 'ringTableCsv') =>
+      callText(measurementEndpoints[table], { params: { measurementId } }),
   });
 }

@@ -1,5 +1,7 @@
-import { useQuery } from '@tanstack/react-query';
+import { useQueries, type UseQueryResult } from '@tanstack/react-query';
+import { useCallback } from 'react';
 import { callBytes } from '@/hooks/api/call';
+import { fresh } from '@/hooks/api/createQueryClient';
 import { useThemeState } from '@/hooks/theme/ThemeProvider';
 import { captureEndpoints } from '@/shared/contracts/captures';
 
@@ -9,25 +11,41 @@ const PIECE = 0x2000;
 function dataAddress(bytes: ArrayBuffer, type: string): string {
   const all = new Uint8Array(bytes);
   let text = '';
-  for (let start = 0; start < all.length; start += PIECE) text += String.fromCharCode(...all.subarray(start, start + PIECE));
+  for (let start = 0; start < all.length; start += PIECE) {
+    text += String.fromCharCode(...all.subarray(start, start + PIECE));
+  }
   return `data:${type};base64,${btoa(text)}`;
 }
 
+/** Addresses of pictures by frame; a frame whose picture has not come is not among them. */
+export type Thumbnails = Readonly<Record<string, string>>;
+
 /**
- * A small picture of a frame in the own colour of its laser. Null: the frame has not been looked at yet.
- * The picture needs the access token, so it cannot be named by its address alone.
+ * Small pictures of frames in the own colour of their laser, as data addresses: a picture needs the access token, so it
+ * cannot be named by its address alone.
  */
-export function useThumbnail(frameId: string | null, wavelengthNm: number) {
+export function useThumbnails(frameIds: readonly string[], wavelengthNm: number | null): Thumbnails {
   const { theme } = useThemeState();
-  return useQuery({
-    queryKey: ['thumbnails', frameId, theme, wavelengthNm] as const,
-    queryFn: async ({ signal }) => {
-      const query = { theme, wavelengthNm: wavelengthNm };
-      const { bytes } = await callBytes(captureEndpoints.thumbnail, { params: { frameId: frameId ?? '' }, query, signal });
-      return dataAddress(bytes, 'image/png');
+  const wanted = wavelengthNm === null ? [] : [...new Set(frameIds)];
+  const listed = wanted.join(',');
+  const combine = useCallback(
+    (results: UseQueryResult<string>[]): Thumbnails => {
+      const ids = listed.split(',');
+      return Object.fromEntries(results.flatMap(({ data }, i) => (data === undefined ? [] : [[ids[i] ?? '', data]])));
     },
-    enabled: frameId !== null,
-    staleTime: Infinity,
-    gcTime: 10 * 60_000,
+    [listed],
+  );
+  return useQueries({
+    queries: wanted.map((frameId) => ({
+      queryKey: ['thumbnails', frameId, theme, wavelengthNm] as const,
+      queryFn: async ({ signal }: { signal: AbortSignal }) => {
+        const query = { theme, wavelengthNm: wavelengthNm ?? undefined };
+        const { bytes } = await callBytes(captureEndpoints.thumbnail, { params: { frameId }, query, signal });
+        return dataAddress(bytes, 'image/png');
+      },
+      staleTime: fresh.fixed,
+      gcTime: 10 * 60_000,
+    })),
+    combine,
   });
 }

@@ -25,8 +25,14 @@ export function readBatch(captureId: string): RememberedFile[] {
  * Remembers what is not stored yet: of `earlier` what has not been chosen again, and of `items` what is under way.
  * A file chosen again is known by its name and size.
  */
-export function writeBatch(captureId: string, earlier: readonly RememberedFile[], items: readonly UploadItem[]): RememberedFile[] {
-  const open = earlier.filter((file) => !items.some((item) => item.name === file.name && item.source.sizeBytes === file.sizeBytes));
+export function writeBatch(
+  captureId: string,
+  earlier: readonly RememberedFile[],
+  items: readonly UploadItem[],
+): RememberedFile[] {
+  const open = earlier.filter(
+    (file) => !items.some((item) => item.name === file.name && item.source.sizeBytes === file.sizeBytes),
+  );
   const now = unheld(items).map(({ name, kind, source }) => ({ name, kind, sizeBytes: source.sizeBytes }));
   const all = [...open, ...now];
   writeTab(keyOf(captureId), all.length === 0 ? null : JSON.stringify(all));

@@ -19,7 +19,8 @@ function isTaken(head: Uint8Array): boolean {
 
 /** Kinds that people send by mistake, and what to send instead. */
 function misfitKind(head: Uint8Array, name: string): string | null {
-  if (text(head, 4, 8) === 'ftyp') return 'This is a HEIC or video file. Set the phone to save JPEG, or send TIFF or PNG.';
+  if (text(head, 4, 8) === 'ftyp')
+    return 'This is a HEIC or video file. Set the phone to save JPEG, or send TIFF or PNG.';
   if (text(head, 0, 3) === 'GIF') return 'This is a GIF. It keeps 256 colours at most. Save it as TIFF or PNG.';
   if (text(head, 0, 2) === 'BM') return 'This is a BMP. Save it as TIFF or PNG.';
   if (text(head, 0, 4) === 'RIFF') return 'This is a WebP or video file. Save it as TIFF or PNG.';

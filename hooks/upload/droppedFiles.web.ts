@@ -24,7 +24,7 @@ export async function droppedFiles(transfer: DataTransfer): Promise<File[]> {
   const entries = Array.from(transfer.items, (item) => item.webkitGetAsEntry());
   const plain = Array.from(transfer.files);
   const files = entries.some((entry) => entry?.isDirectory)
-    ? (await Promise.all(entries.map((entry) => (entry ? filesUnder(entry) : [])))).flat()
+    ? (await Promise.all(entries.map((entry) => (entry ? filesUnder(entry) : Promise.resolve([]))))).flat()
     : plain;
   return files
     .filter((file) => !file.name.startsWith('.'))

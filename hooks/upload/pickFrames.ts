@@ -13,18 +13,25 @@ export interface Picked {
 /** Takes one picture with the device's camera. */
 export async function snapFrame(): Promise<Picked> {
   const permission = await ImagePicker.requestCameraPermissionsAsync();
-  if (!permission.granted) return { sources: [], problem: 'The camera is not allowed. Allow it in the settings of this device.' };
+  if (!permission.granted)
+    return { sources: [], problem: 'The camera is not allowed. Allow it in the settings of this device.' };
   const result = await ImagePicker.launchCameraAsync({ mediaTypes: ['images'], quality: 1, exif: true });
   const assets = result.assets ?? [];
   return {
-    sources: assets.map((asset) => fileSource(asset.uri, snapName(new Date(), asset.fileName, asset.mimeType), asset.mimeType)),
+    sources: assets.map((asset) =>
+      fileSource(asset.uri, snapName(new Date(), asset.fileName, asset.mimeType), asset.mimeType),
+    ),
     problem: null,
   };
 }
 
 /** Chooses pictures from the device's library. */
 export async function pickFromLibrary(): Promise<Picked> {
-  const result = await ImagePicker.launchImageLibraryAsync({ mediaTypes: ['images'], allowsMultipleSelection: true, quality: 1 });
+  const result = await ImagePicker.launchImageLibraryAsync({
+    mediaTypes: ['images'],
+    allowsMultipleSelection: true,
+    quality: 1,
+  });
   const assets = result.assets ?? [];
   return {
     sources: assets.map((asset, i) => fileSource(asset.uri, asset.fileName ?? `picture-${i + 1}.jpg`, asset.mimeType)),

@@ -14,7 +14,10 @@ export interface Picked {
 const NO_FILE = 'The browser gave no file. Use Add stills instead.';
 
 /** The picker has drawn each picture once to know its size; its addresses are not needed any more. */
-function sourcesOf(assets: readonly ImagePicker.ImagePickerAsset[], nameOf: (asset: ImagePicker.ImagePickerAsset) => string): Picked {
+function sourcesOf(
+  assets: readonly ImagePicker.ImagePickerAsset[],
+  nameOf: (asset: ImagePicker.ImagePickerAsset) => string,
+): Picked {
   assets.forEach((asset) => {
     if (asset.uri.startsWith('blob:')) URL.revokeObjectURL(asset.uri);
   });
@@ -30,13 +33,21 @@ export async function snapFrame(): Promise<Picked> {
 
 /** Chooses pictures from the phone's library. */
 export async function pickFromLibrary(): Promise<Picked> {
-  const result = await ImagePicker.launchImageLibraryAsync({ mediaTypes: ['images'], allowsMultipleSelection: true, quality: 1 });
+  const result = await ImagePicker.launchImageLibraryAsync({
+    mediaTypes: ['images'],
+    allowsMultipleSelection: true,
+    quality: 1,
+  });
   return sourcesOf(result.assets ?? [], (asset) => asset.file?.name ?? 'picture.jpg');
 }
 
 /** Chooses files, camera stills such as 16-bit TIFF among them. */
 export async function pickStills(): Promise<Picked> {
-  const result = await DocumentPicker.getDocumentAsync({ type: ['image/*', ...FRAME_EXTENSIONS], multiple: true, base64: false });
+  const result = await DocumentPicker.getDocumentAsync({
+    type: ['image/*', ...FRAME_EXTENSIONS],
+    multiple: true,
+    base64: false,
+  });
   const assets = result.assets ?? [];
   const sources = assets.flatMap((asset) => (asset.file ? [fileSource(asset.file)] : []));
   return { sources, problem: sources.length < assets.length ? NO_FILE : null };

@@ -25,7 +25,11 @@ interface SendOptions {
 }
 
 /** One attempt; answers with status and text. `fetch` cannot tell how much has gone out, so this is XMLHttpRequest. */
-function post(file: SentFile, token: string, { signal, onProgress }: SendOptions): Promise<{ status: number; text: string }> {
+function post(
+  file: SentFile,
+  token: string,
+  { signal, onProgress }: SendOptions,
+): Promise<{ status: number; text: string }> {
   return new Promise((resolve, reject) => {
     const endpoint = captureEndpoints.upload;
     const request = new XMLHttpRequest();
@@ -55,7 +59,9 @@ function post(file: SentFile, token: string, { signal, onProgress }: SendOptions
     request.upload.onload = () => watchFor(ANSWER_MS);
     request.onload = end(() => resolve({ status: request.status, text: request.responseText }));
     request.onerror = end(() => reject(new UploadProblem('network', NO_NETWORK)));
-    request.onabort = end(() => reject(signal.aborted ? (signal.reason as Error) : new UploadProblem('network', NO_NETWORK)));
+    request.onabort = end(() =>
+      reject(signal.aborted ? (signal.reason as Error) : new UploadProblem('network', NO_NETWORK)),
+    );
     request.open(endpoint.method.toUpperCase(), urlOf(endpoint, { params: { captureId: file.captureId } }));
     request.setRequestHeader('Authorization', `Bearer ${token}`);
     Object.entries(ownRequest).forEach(([name, value]) => request.setRequestHeader(name, value));

@@ -91,7 +91,11 @@ export function uploadQueue(options: UploadQueueOptions): UploadQueue {
   function freeTwins(ids: readonly string[]): void {
     const isFreed = (item: UploadItem) => item.twinOf !== null && ids.includes(item.twinOf) && item.state === 'known';
     if (items.some(isFreed)) {
-      publish(items.map((item) => (isFreed(item) ? { ...item, state: 'hashed', twinOf: null, problem: null, part: 0 } : item)));
+      publish(
+        items.map((item) =>
+          isFreed(item) ? { ...item, state: 'hashed', twinOf: null, problem: null, part: 0 } : item,
+        ),
+      );
     }
   }
 
@@ -99,7 +103,10 @@ export function uploadQueue(options: UploadQueueOptions): UploadQueue {
     const item = find(id);
     if (!item || item.state === 'cancelled') return;
     const attempts = item.attempts + 1;
-    const problem = cause instanceof UploadProblem ? cause : new UploadProblem('refused', 'The file cannot be read. Choose it again.');
+    const problem =
+      cause instanceof UploadProblem
+        ? cause
+        : new UploadProblem('refused', 'The file cannot be read. Choose it again.');
     const goesOn = problem.kind === 'network' || (problem.kind === 'busy' && attempts < busyAttempts);
     if (!goesOn) {
       patch(id, { state: 'failed', problem: problem.message, attempts, part: 0, secondsLeft: null });
@@ -126,7 +133,9 @@ export function uploadQueue(options: UploadQueueOptions): UploadQueue {
     wakeTimer = null;
     if (items.some((item) => item.state === 'offline')) {
       publish(
-        items.map((item) => (item.state === 'offline' ? { ...item, state: item.sha256 === null ? 'hashing' : 'hashed' } : item)),
+        items.map((item) =>
+          item.state === 'offline' ? { ...item, state: item.sha256 === null ? 'hashing' : 'hashed' } : item,
+        ),
       );
     }
     run();
@@ -147,7 +156,10 @@ export function uploadQueue(options: UploadQueueOptions): UploadQueue {
       patch(id, { state: 'hashing', part: 0 });
       const sha256 = await hash(item.source, { signal: controller.signal, onProgress: (part) => patch(id, { part }) });
       if (controller.signal.aborted) return;
-      const twin = items.find((other) => other.id !== id && other.sha256 === sha256 && other.state !== 'failed' && other.state !== 'cancelled');
+      const twin = items.find(
+        (other) =>
+          other.id !== id && other.sha256 === sha256 && other.state !== 'failed' && other.state !== 'cancelled',
+      );
       patch(id, { sha256, part: 0 });
       if (twin) {
         patch(id, { twinOf: twin.twinOf ?? twin.id });
@@ -231,7 +243,9 @@ export function uploadQueue(options: UploadQueueOptions): UploadQueue {
   function run(): void {
     const preparing = [...controllers.keys()].some((id) => ['checking', 'hashing'].includes(find(id)?.state ?? ''));
     if (!preparing) {
-      const next = items.filter((i) => (i.state === 'checking' || i.state === 'hashing') && !controllers.has(i.id)).sort(byOrder)[0];
+      const next = items
+        .filter((i) => (i.state === 'checking' || i.state === 'hashing') && !controllers.has(i.id))
+        .sort(byOrder)[0];
       if (next) void prepare(next.id).then(run);
     }
     if (wakeTimer === null) {
@@ -292,7 +306,9 @@ export function uploadQueue(options: UploadQueueOptions): UploadQueue {
     cancelAll() {
       const going = items.filter(isWorking).map((item) => item.id);
       publish(
-        items.map((item) => (isWorking(item) ? { ...item, state: 'cancelled', part: 0, secondsLeft: null, problem: null } : item)),
+        items.map((item) =>
+          isWorking(item) ? { ...item, state: 'cancelled', part: 0, secondsLeft: null, problem: null } : item,
+        ),
       );
       going.forEach((id) => controllers.get(id)?.abort());
       run();

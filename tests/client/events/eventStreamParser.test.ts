@@ -15,7 +15,9 @@ describe('eventStreamParser', () => {
   });
 
   it('drops comments, one leading space and events without data', () => {
-    expect(read(': test stream\n\ndata: first event\nid: 1\n\ndata:second event\nid\n\ndata:  third event\n\n')).toEqual([
+    expect(
+      read(': test stream\n\ndata: first event\nid: 1\n\ndata:second event\nid\n\ndata:  third event\n\n'),
+    ).toEqual([
       { name: 'message', data: 'first event' },
       { name: 'message', data: 'second event' },
       { name: 'message', data: ' third event' },

@@ -34,7 +34,10 @@ describe('hashSource', () => {
 
   it('hashes in pieces where the page has no secure context, and tells how far it is', async () => {
     const parts: number[] = [];
-    const answer = await hashSource(memorySource('frame.tif', bytes), { digest: null, onProgress: (p) => parts.push(p) });
+    const answer = await hashSource(memorySource('frame.tif', bytes), {
+      digest: null,
+      onProgress: (p) => parts.push(p),
+    });
     expect(answer).toBe(expected);
     expect(parts).toHaveLength(4);
     expect(parts.at(-1)).toBe(1);

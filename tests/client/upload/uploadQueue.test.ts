@@ -12,7 +12,8 @@ const pause = (ms = 5) => new Promise((resolve) => setTimeout(resolve, ms));
 function laboratory() {
   const kept = new Set<string>();
   const order: string[] = [];
-  const waiting: { name: string; go: () => void; fail: (cause: Error) => void; progress: (bytes: number) => void }[] = [];
+  const waiting: { name: string; go: () => void; fail: (cause: Error) => void; progress: (bytes: number) => void }[] =
+    [];
   const port: jest.Mocked<UploadPort> = {
     placeKnown: jest.fn(async (files) => files.map((f) => f.sha256).filter((h) => !kept.has(h))),
     send: jest.fn(
@@ -20,7 +21,10 @@ function laboratory() {
         new Promise<void>((resolve, reject) => {
           order.push(item.name);
           signal.addEventListener('abort', () => {
-            waiting.splice(waiting.findIndex((w) => w.name === item.name), 1);
+            waiting.splice(
+              waiting.findIndex((w) => w.name === item.name),
+              1,
+            );
             reject(new Error('aborted'));
           });
           waiting.push({
@@ -155,7 +159,11 @@ describe('uploadQueue', () => {
     lab.port.send.mockRejectedValue(new UploadProblem('busy', 'The server had a fault. Number 12.'));
     queue.add([file('a.tif')]);
     await pause(120);
-    expect(queue.items()[0]).toMatchObject({ state: 'failed', attempts: 3, problem: 'The server had a fault. Number 12.' });
+    expect(queue.items()[0]).toMatchObject({
+      state: 'failed',
+      attempts: 3,
+      problem: 'The server had a fault. Number 12.',
+    });
     lab.port.send.mockResolvedValue(undefined);
     queue.retry(queue.items()[0]!.id);
     await pause(40);
