@@ -1,7 +1,7 @@
 import { Skia, type SkTypeface } from '@shopify/react-native-skia';
+import { Asset } from 'expo-asset';
 import text400 from '@/assets/fonts/B612-400.ttf';
 import text700 from '@/assets/fonts/B612-700.ttf';
-import { assetUri } from './assetUri';
 
 export interface Typefaces {
   regular: SkTypeface;
@@ -21,8 +21,8 @@ export function loadTypefaces(): Promise<Typefaces> {
   return loading;
 }
 
-async function fetchTypeface(module: unknown): Promise<SkTypeface> {
-  const data = await Skia.Data.fromURI(assetUri(module));
+async function fetchTypeface(module: number): Promise<SkTypeface> {
+  const data = await Skia.Data.fromURI(Asset.fromModule(module).uri);
   const face = Skia.Typeface.MakeFreeTypeFaceFromData(data);
   if (!face) throw new Error('The text face could not be read.');
   return face;
