@@ -23,7 +23,7 @@ export function ScreenHead({ title, subtitle, note, back, action, level }: Scree
         style={{
           minHeight: level === 1 ? shell.head + 4 : 44,
           paddingLeft: space.l,
-          paddingRight: action ? 4 : space.l,
+          paddingRight: level === 1 || action ? 4 : space.l,
           flexDirection: 'row',
           alignItems: 'center',
           gap: space.m,
@@ -43,7 +43,10 @@ export function ScreenHead({ title, subtitle, note, back, action, level }: Scree
             </Text>
           </View>
         ) : null}
-        {action ? <View style={{ marginLeft: subtitle || note ? 0 : 'auto' }}>{action}</View> : null}
+        <View style={{ marginLeft: subtitle || note ? 0 : 'auto', flexDirection: 'row', alignItems: 'center' }}>
+          {action}
+          {level === 1 ? <IconButton icon="more" label="More: people, mail, account" href="/more" /> : null}
+        </View>
       </View>
     );
   }

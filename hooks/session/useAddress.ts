@@ -1,0 +1,22 @@
+import { useGlobalSearchParams, usePathname, useSegments } from 'expo-router';
+
+/** The address within the application, with its query: where a person wants to be after signing in. */
+export function useAddress(): string {
+  const path = usePathname();
+  const segments: readonly string[] = useSegments();
+  const params = useGlobalSearchParams();
+  const inPath = new Set(
+    segments.filter((segment) => segment.startsWith('[')).map((segment) => segment.replace(/[[\].]/g, '')),
+  );
+  const query = new URLSearchParams();
+  for (const [name, value] of Object.entries(params)) {
+    if (!inPath.has(name) && typeof value === 'string') query.set(name, value);
+  }
+  const text = query.toString();
+  return text ? `${path}?${text}` : path;
+}
+
+/** An address given from outside, if it lies within the application; else the start. */
+export function localAddress(address: string | undefined): string {
+  return address !== undefined && /^\/(?![/\\])/.test(address) && !address.startsWith('/sign-in') ? address : '/';
+}
