@@ -11,8 +11,15 @@ export const PEAK_LOW = 0.25;
 export const PEAK_HIGH = 0.95;
 
 /** The peak of a frame in its gap between noise and clipping. */
-export function PeakSlot({ health, style }: { health: NonNullable<CaptureFrame['health']>; style?: StyleProp<ViewStyle> }) {
-  const place = health.peakFraction < PEAK_LOW ? 'low' : health.peakFraction > PEAK_HIGH ? 'near clipping' : 'in its gap';
+export function PeakSlot({
+  health,
+  style,
+}: {
+  health: NonNullable<CaptureFrame['health']>;
+  style?: StyleProp<ViewStyle>;
+}) {
+  const place =
+    health.peakFraction < PEAK_LOW ? 'low' : health.peakFraction > PEAK_HIGH ? 'near clipping' : 'in its gap';
   return (
     <Slot
       size="sm"

@@ -42,9 +42,7 @@ export function captureRows(frames: readonly CaptureFrame[], files: readonly Sen
     ...[...frames]
       .sort((a, b) => a.createdAt.localeCompare(b.createdAt) || a.name.localeCompare(b.name, 'en', { numeric: true }))
       .map((frame): CaptureRow => ({ type: 'frame', key: frame.id, frame })),
-    ...files
-      .filter((file) => !arrived(file))
-      .map((file): CaptureRow => ({ type: 'sending', key: file.id, file })),
+    ...files.filter((file) => !arrived(file)).map((file): CaptureRow => ({ type: 'sending', key: file.id, file })),
   ];
 }
 
@@ -103,7 +101,8 @@ export function sendingWords(file: SendingFile): string {
       return 'waits its turn';
     case 'sending': {
       if (file.part >= 1) return 'sent, being stored';
-      const left = file.secondsLeft === null ? '' : `, ${formatNumber(Math.max(1, file.secondsLeft), { places: 0 })} s left`;
+      const left =
+        file.secondsLeft === null ? '' : `, ${formatNumber(Math.max(1, file.secondsLeft), { places: 0 })} s left`;
       return `${formatPercent(file.part, { places: 0 })}${left}`;
     }
     case 'offline':

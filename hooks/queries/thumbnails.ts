@@ -1,8 +1,8 @@
-import { useQueries, type UseQueryResult } from '@tanstack/react-query';
+import { queryOptions, useQueries, useQuery, type UseQueryResult } from '@tanstack/react-query';
 import { useCallback } from 'react';
 import { callBytes } from '@/hooks/api/call';
 import { fresh } from '@/hooks/api/createQueryClient';
-import { useThemeState } from '@/hooks/theme/ThemeProvider';
+import { useThemeState, type ThemeName } from '@/hooks/theme/ThemeProvider';
 import { captureEndpoints } from '@/shared/contracts/captures';
 
 const PIECE = 0x2000;
@@ -15,6 +15,24 @@ function dataAddress(bytes: ArrayBuffer, type: string): string {
     text += String.fromCharCode(...all.subarray(start, start + PIECE));
   }
   return `data:${type};base64,${btoa(text)}`;
+}
+
+const thumbnailQuery = (frameId: string, theme: ThemeName, wavelengthNm: number | null) =>
+  queryOptions({
+    queryKey: ['thumbnails', frameId, theme, wavelengthNm] as const,
+    queryFn: async ({ signal }) => {
+      const query = { theme, wavelengthNm: wavelengthNm ?? undefined };
+      const { bytes } = await callBytes(captureEndpoints.thumbnail, { params: { frameId }, query, signal });
+      return dataAddress(bytes, 'image/png');
+    },
+    staleTime: fresh.fixed,
+    gcTime: 10 * 60_000,
+  });
+
+/** The small picture of one frame as a data address. Null: nothing is asked for. */
+export function useThumbnail(frameId: string | null, wavelengthNm: number | null) {
+  const { theme } = useThemeState();
+  return useQuery({ ...thumbnailQuery(frameId ?? '', theme, wavelengthNm), enabled: frameId !== null });
 }
 
 /** Addresses of pictures by frame; a frame whose picture has not come is not among them. */
@@ -35,17 +53,5 @@ export function useThumbnails(frameIds: readonly string[], wavelengthNm: number 
     },
     [listed],
   );
-  return useQueries({
-    queries: wanted.map((frameId) => ({
-      queryKey: ['thumbnails', frameId, theme, wavelengthNm] as const,
-      queryFn: async ({ signal }: { signal: AbortSignal }) => {
-        const query = { theme, wavelengthNm: wavelengthNm ?? undefined };
-        const { bytes } = await callBytes(captureEndpoints.thumbnail, { params: { frameId }, query, signal });
-        return dataAddress(bytes, 'image/png');
-      },
-      staleTime: fresh.fixed,
-      gcTime: 10 * 60_000,
-    })),
-    combine,
-  });
+  return useQueries({ queries: wanted.map((frameId) => thumbnailQuery(frameId, theme, wavelengthNm)), combine });
 }
