@@ -22,10 +22,10 @@ export function niceStep(pxPerUnit: number, minGapPx: number): number {
   return 10 * power;
 }
 
-/** Multiples of `step` from `from` to `to`, both included. */
+/** Multiples of `step` from `from` to `to`, both included; zero is never negative. */
 export function marks(from: number, to: number, step: number): number[] {
   const out: number[] = [];
-  for (let i = Math.ceil(from / step - 1e-9); i * step <= to + 1e-9 * step; i += 1) out.push(i * step);
+  for (let i = Math.ceil(from / step - 1e-9); i * step <= to + 1e-9 * step; i += 1) out.push(i * step + 0);
   return out;
 }
 

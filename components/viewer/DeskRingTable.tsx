@@ -5,7 +5,8 @@ import { Touch } from '@/components/ui/Touch';
 import { useLook } from '@/components/ui/useLook';
 import { webProps } from '@/components/ui/webProps';
 import type { Ring } from '@/shared/contracts/measureResult';
-import { formatMeasured, formatNumber } from '@/shared/units/format';
+import { placesOfUncertainty } from '@/components/measurement/placesOfUncertainty';
+import { formatNumber } from '@/shared/units/format';
 import type { MeasuredFrame } from './SheetScene';
 
 interface Props {
@@ -33,6 +34,9 @@ export function DeskRingTable({ dark, measured, rowYs, headPx, chosenOrder, onCh
   const gap = ys.length > 1 ? Math.min(...ys.slice(1).map((y, i) => y - ys[i]!)) : 56;
   const rowHeight = Math.max(20, Math.min(56, gap - 2));
   const size = rowHeight >= 36 ? 20 : 15;
+  // One number of decimals for a column, so that its points stand under each other.
+  const radiusPlaces = Math.max(0, ...dark.map((r) => placesOfUncertainty(r.uncertaintyMm)));
+  const sizePlaces = Math.max(0, ...dark.map((r) => placesOfUncertainty((r.sizeUm * r.uncertaintyMm) / r.radiusMm)));
   const cell = (flex: number, i: number) => ({
     flex,
     alignItems: i === 0 ? ('flex-start' as const) : ('flex-end' as const),
@@ -57,15 +61,16 @@ export function DeskRingTable({ dark, measured, rowYs, headPx, chosenOrder, onCh
           const y = rowYs.get(ring.order);
           if (y === undefined) return null;
           const chosen = ring.order === chosenOrder;
-          const radiusText = formatMeasured(ring.radiusMm, ring.uncertaintyMm);
-          const sizeText = formatMeasured(ring.sizeUm, (ring.sizeUm * ring.uncertaintyMm) / ring.radiusMm).value;
+          const radiusText = formatNumber(ring.radiusMm, { places: radiusPlaces });
+          const errorText = formatNumber(ring.uncertaintyMm, { places: radiusPlaces });
+          const sizeText = formatNumber(ring.sizeUm, { places: sizePlaces });
           const figure = { fontFamily: fontFamily.figure, fontSize: size, lineHeight: size + 4, color: colours.ink0 };
           return (
             <Touch
               key={ring.order}
               role="option"
               selected={chosen}
-              label={`Dark ring ${ring.order}, radius ${radiusText.value} plus or minus ${radiusText.uncertainty ?? '?'} mm, size ${sizeText} µm`}
+              label={`Dark ring ${ring.order}, radius ${radiusText} plus or minus ${errorText} mm, size ${sizeText} µm`}
               onPress={() => onChoose(chosen ? null : ring.order)}
               style={({ pressed }) => ({
                 position: 'absolute',
@@ -86,10 +91,10 @@ export function DeskRingTable({ dark, measured, rowYs, headPx, chosenOrder, onCh
                 </Text>
               </View>
               <View style={cell(columns[1].flex, 1)}>
-                <Text style={figure}>{radiusText.value}</Text>
+                <Text style={figure}>{radiusText}</Text>
               </View>
               <View style={cell(columns[2].flex, 2)}>
-                <Text>{radiusText.uncertainty ?? '–'}</Text>
+                <Text>{errorText}</Text>
               </View>
               <View style={cell(columns[3].flex, 3)}>
                 <Text style={figure}>{sizeText}</Text>

@@ -14,7 +14,8 @@ interface Props {
 /** A number that stands alone: what it is above, its unit behind. */
 export function NumberPlate({ label, value, unit, flex = 1 }: Props) {
   const { colours, desk } = useLook();
-  const size = desk ? 28 : 21;
+  // Long numbers shrink; they are never cut.
+  const size = Math.round((desk ? 28 : 21) * Math.min(1, 6.4 / value.length));
   return (
     <View
       style={{

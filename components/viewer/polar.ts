@@ -9,8 +9,8 @@ export interface PolarPoint {
 
 export function toPolar(centre: Point, frame: Point): PolarPoint {
   const dx = frame.x - centre.x;
-  const dy = frame.y - centre.y;
-  const angleDeg = (Math.atan2(-dy, dx) * 180) / Math.PI;
+  const dy = centre.y - frame.y;
+  const angleDeg = (Math.atan2(dy, dx) * 180) / Math.PI;
   return { radiusPx: Math.hypot(dx, dy), angleDeg: angleDeg < 0 ? angleDeg + 360 : angleDeg };
 }
 
