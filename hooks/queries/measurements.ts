@@ -37,11 +37,12 @@ export function useMeasurements(filter: MeasurementFilter = {}) {
   return useQuery(measurementsQuery(filter));
 }
 
-/** A measurement that keeps itself up to date while it runs. */
-export function useMeasurement(measurementId: string) {
+/** A measurement that keeps itself up to date while it runs. Null: nothing is asked for. */
+export function useMeasurement(measurementId: string | null) {
   const streamIsDown = useStreamIsDown();
   return useQuery({
-    ...measurementQuery(measurementId),
+    ...measurementQuery(measurementId ?? ''),
+    enabled: measurementId !== null,
     refetchInterval: ({ state }) => (state.data && isRunning(state.data.state) ? pollEvery(streamIsDown) : false),
   });
 }
