@@ -36,6 +36,8 @@ const environmentSchema = z
     LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
     /** Cost of bcrypt: each step doubles the work. Tests use less. */
     PASSWORD_COST: z.coerce.number().int().min(4).max(15).default(12),
+    /** Widens the limits on sign-in, registration and password mails, for many people behind one address and for tests. */
+    RATE_LIMIT_FACTOR: z.coerce.number().min(1).max(10_000).default(1),
     WORKER_PORT: port.default(8481),
     /** Child processes that decode and measure; default: one per core. */
     WORKER_CHILDREN: z.coerce.number().int().min(1).max(64).optional(),
@@ -63,6 +65,7 @@ export interface Config {
   tls: { certFile: string; keyFile: string } | null;
   logLevel: string;
   passwordCost: number;
+  rateLimitFactor: number;
   workerPort: number;
   workerChildren: number;
   frameSeconds: number;
@@ -92,6 +95,7 @@ export function readConfig(environment: Environment = process.env): Config {
     tls: tls ? { certFile: e.TLS_CERT_FILE as string, keyFile: e.TLS_KEY_FILE as string } : null,
     logLevel: e.LOG_LEVEL,
     passwordCost: e.PASSWORD_COST,
+    rateLimitFactor: e.RATE_LIMIT_FACTOR,
     workerPort: e.WORKER_PORT,
     workerChildren: e.WORKER_CHILDREN ?? availableParallelism(),
     frameSeconds: e.FRAME_SECONDS,

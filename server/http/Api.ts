@@ -35,7 +35,10 @@ export type FileReader<E extends Endpoint, Stored> = (
   },
 ) => Promise<{ body: BodyOf<E>; file: Stored }>;
 
-interface OpenOptions {
+/** What a handler returns: nothing where the contract answers with nothing. */
+type Returned<E extends Endpoint> = AnswerOf<E> extends undefined ? void : AnswerOf<E>;
+
+interface RouteOptions {
   /** Runs before anything else, for example a rate limit. */
   before?: RequestHandler[];
 }
@@ -58,6 +61,7 @@ const OWN_HEADER_VALUE = 'ringwright';
 export class Api {
   readonly router = Router();
   private readonly names = new Set<string>();
+  private readonly streams = new Set<EventStream>();
 
   constructor(private readonly tokens: AccessTokens) {}
 
@@ -67,20 +71,29 @@ export class Api {
   }
 
   /** An endpoint for people who are signed in, with a JSON answer or none. */
-  register<E extends Endpoint>(endpoint: E, handle: (call: ActorCall<E>) => Promise<AnswerOf<E>>): void {
+  register<E extends Endpoint>(
+    endpoint: E,
+    handle: (call: ActorCall<E>) => Promise<Returned<E>>,
+    { before }: RouteOptions = {},
+  ): void {
     const allowed = rolesOf(endpoint);
-    this.add(endpoint, ['json', 'empty'], async (request, response) => {
-      const actor = this.authorize(request, allowed);
-      const call = { actor, ...validCall(endpoint, request, response) };
-      sendJson(endpoint, response, await handle(call));
-    });
+    this.add(
+      endpoint,
+      ['json', 'empty'],
+      async (request, response) => {
+        const actor = this.authorize(request, allowed);
+        const call = { actor, ...validCall(endpoint, request, response) };
+        sendJson(endpoint, response, await handle(call));
+      },
+      before,
+    );
   }
 
   /** An endpoint for anybody, or for whoever holds the refresh cookie. */
   registerOpen<E extends Endpoint>(
     endpoint: E,
-    handle: (call: Call<E>) => Promise<AnswerOf<E>>,
-    { before = [] }: OpenOptions = {},
+    handle: (call: Call<E>) => Promise<Returned<E>>,
+    { before }: RouteOptions = {},
   ): void {
     if (endpoint.access !== 'public' && endpoint.access !== 'cookie') throw wrongUse(endpoint, 'is not open');
     this.add(
@@ -108,7 +121,7 @@ export class Api {
   registerUpload<E extends Endpoint, Stored>(
     endpoint: E,
     read: FileReader<E, Stored>,
-    handle: (call: UploadCall<E, Stored>) => Promise<AnswerOf<E>>,
+    handle: (call: UploadCall<E, Stored>) => Promise<Returned<E>>,
   ): void {
     if (!endpoint.multipart) throw wrongUse(endpoint, 'takes no file');
     const allowed = rolesOf(endpoint);
@@ -137,8 +150,15 @@ export class Api {
       const actor = this.authorize(request, allowed);
       const call = { actor, ...validCall(endpoint, request, response) };
       const events = new EventStream(response, actor.until);
+      this.streams.add(events);
+      events.onClose(() => this.streams.delete(events));
       await open({ ...call, events });
     });
+  }
+
+  /** Ends every event stream that is open, when the process is to stop. Browsers come back by themselves. */
+  endStreams(): void {
+    for (const events of this.streams) events.end();
   }
 
   private add(
@@ -193,8 +213,10 @@ function validCall<E extends Endpoint>(endpoint: E, request: Request, response: 
 }
 
 /** Sends what the schema declares; anything else that the handler returned stays here. */
-function sendJson<E extends Endpoint>(endpoint: E, response: Response, answer: AnswerOf<E>): void {
-  response.status(endpoint.status).set('Cache-Control', 'no-store');
+function sendJson<E extends Endpoint>(endpoint: E, response: Response, answer: Returned<E>): void {
+  // A handler may have chosen another status, for example 503 from the health check.
+  if (response.statusCode === 200) response.status(endpoint.status);
+  response.set('Cache-Control', 'no-store');
   if (endpoint.kind === 'empty') response.end();
   else response.json(endpoint.answer.parse(answer));
 }
