@@ -82,7 +82,7 @@ export default tseslint.config(
       ...importX.flatConfigs.typescript.settings,
       'import-x/resolver-next': [
         createTypeScriptImportResolver({
-          project: ['tsconfig.json', 'server/tsconfig.json'],
+          project: ['tsconfig.json', 'server/tsconfig.json', 'tests/e2e/tsconfig.json'],
           noWarnOnMultipleProjects: true,
         }),
       ],
@@ -109,7 +109,10 @@ export default tseslint.config(
     files: typed,
     extends: [tseslint.configs.recommended],
     languageOptions: {
-      parserOptions: { project: ['tsconfig.json', 'server/tsconfig.json'], tsconfigRootDir: import.meta.dirname },
+      parserOptions: {
+        project: ['tsconfig.json', 'server/tsconfig.json', 'tests/e2e/tsconfig.json'],
+        tsconfigRootDir: import.meta.dirname,
+      },
     },
     rules: {
       '@typescript-eslint/await-thenable': 'error',

@@ -42,11 +42,13 @@ async function check(tool, file, args) {
   return ended.status === 0 ? passedOne : failedOne;
 }
 
-/** The client and the server have a project each. */
+/** The client, the server and the browser tests have a project each. */
 async function checkTypes() {
-  const client = await check('typescript', 'bin/tsc', ['--noEmit']);
-  const server = await check('typescript', 'bin/tsc', ['--noEmit', '-p', 'server/tsconfig.json']);
-  return sum([client, server]);
+  const counts = [];
+  for (const project of ['tsconfig.json', 'server/tsconfig.json', 'tests/e2e/tsconfig.json']) {
+    counts.push(await check('typescript', 'bin/tsc', ['--noEmit', '-p', project]));
+  }
+  return sum(counts);
 }
 
 /** @returns {Promise<Count>} */
