@@ -55,8 +55,8 @@ export const illuminationSchema = z.discriminatedUnion('kind', [
 export type Illumination = z.infer<typeof illuminationSchema>;
 
 export const revisionBody = z.object({
-  laserId: id,
-  cameraId: id,
+  laserId: z.uuid('Choose the laser.'),
+  cameraId: z.uuid('Choose the camera.'),
   /** Aperture to sensitive plane; cover glass is added from the camera. */
   distanceMm: positive('The distance', 'mm', 100_000),
   /** Standard uncertainty (k = 1). */

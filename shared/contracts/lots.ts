@@ -14,7 +14,7 @@ export const clientSchema = clientBody.extend({ id, createdAt: instant });
 
 export const lotBody = z.object({
   number: shortText('the number of the lot', 40),
-  clientId: id,
+  clientId: z.uuid('Choose the client.'),
   orderReference: z.string().trim().max(80).default(''),
   dueOn: day.nullable().default(null),
   note: note.default(''),

@@ -1,0 +1,115 @@
+import { useLocalSearchParams } from 'expo-router';
+import { View } from 'react-native';
+import { AperturePanel } from '@/components/lots/AperturePanel';
+import { ApertureTable } from '@/components/lots/ApertureTable';
+import { countOfKind, dueWords } from '@/components/lots/apertureWords';
+import { LotList } from '@/components/lots/LotList';
+import { LotSummary } from '@/components/lots/LotSummary';
+import { Awaited } from '@/components/ui/Awaited';
+import { Button } from '@/components/ui/Button';
+import { EmptyState } from '@/components/ui/EmptyState';
+import { IconButton } from '@/components/ui/IconButton';
+import { Plate } from '@/components/ui/Plate';
+import { Screen } from '@/components/ui/Screen';
+import { Text } from '@/components/ui/Text';
+import { useLook } from '@/components/ui/useLook';
+import { useChosenBench } from '@/hooks/queries/chosenBench';
+import { useLot, useLots } from '@/hooks/queries/lots';
+import { useRole } from '@/hooks/session/SessionProvider';
+import { BENCH, STAFF } from '@/shared/contracts/roles';
+import { formatDate } from '@/shared/units/format';
+
+export default function LotScreen() {
+  const { lotId, aperture: apertureId } = useLocalSearchParams<{ lotId: string; aperture?: string }>();
+  const { desk, layout } = useLook();
+  const role = useRole();
+  const staff = STAFF.includes(role);
+  const lots = useLots();
+  const lot = useLot(lotId);
+  const { light } = useChosenBench();
+  const data = lot.data;
+  const chosen = data?.apertures.find((one) => one.id === apertureId) ?? (desk ? data?.apertures[0] : undefined);
+  const panel = chosen ? <AperturePanel aperture={chosen} mayCapture={BENCH.includes(role)} mayEdit={staff} /> : null;
+
+  if (!desk && apertureId !== undefined) {
+    return (
+      <Screen
+        title={chosen?.serial ?? 'Aperture'}
+        subtitle={data ? `Lot ${data.number}, ${data.clientName}` : undefined}
+        back={`/lots/${lotId}`}
+        {...light}
+      >
+        <Awaited result={lot} what="the lot">
+          {() => panel ?? <EmptyState sentence="This lot has no such aperture. Go back to the lot." />}
+        </Awaited>
+      </Screen>
+    );
+  }
+
+  const actions = staff ? (
+    desk ? (
+      <View style={{ flexDirection: 'row', gap: 2 }}>
+        <IconButton icon="note" label="Change the lot" href={`/lots/${lotId}/edit`} />
+        <Button label="Add pieces" icon="plus" dense href={`/lots/${lotId}/add`} />
+      </View>
+    ) : (
+      <View style={{ flexDirection: 'row' }}>
+        <IconButton icon="note" label="Change the lot" href={`/lots/${lotId}/edit`} />
+        <IconButton icon="plus" label="Add pieces" href={`/lots/${lotId}/add`} />
+      </View>
+    )
+  ) : undefined;
+  return (
+    <Screen
+      title={data ? `${data.number}, ${countOfKind(data.apertures.map((one) => one.kind))}` : 'Lot'}
+      subtitle={
+        data ? `${data.clientName}, ${dueWords(data.dueOn === null ? null : formatDate(data.dueOn))}` : undefined
+      }
+      back="/lots"
+      action={actions}
+      list={
+        layout === 'wide'
+          ? {
+              title: 'Lots',
+              width: 300,
+              content: (
+                <Awaited result={lots} what="the lots">
+                  {(list) => <LotList lots={list} selectedId={lotId} narrow />}
+                </Awaited>
+              ),
+            }
+          : undefined
+      }
+      evidence={desk && chosen ? { title: chosen.serial, width: 400, content: panel } : undefined}
+      {...light}
+    >
+      <Awaited result={lot} what="the lot">
+        {(one) => (
+          <>
+            {one.apertures.length === 0 ? (
+              <EmptyState
+                sentence={staff ? 'No pieces yet. Add them one by one or by a serial pattern.' : 'No pieces yet.'}
+                action={staff ? <Button label="Add pieces" kind="primary" href={`/lots/${lotId}/add`} /> : undefined}
+              />
+            ) : (
+              <>
+                <LotSummary apertures={one.apertures} />
+                <ApertureTable
+                  lotId={lotId}
+                  apertures={one.apertures}
+                  selectedId={desk ? (chosen?.id ?? null) : null}
+                />
+              </>
+            )}
+            {one.note || one.orderReference ? (
+              <Plate>
+                {one.orderReference ? <Text tone="ink2">{`Order ${one.orderReference}`}</Text> : null}
+                {one.note ? <Text>{one.note}</Text> : null}
+              </Plate>
+            ) : null}
+          </>
+        )}
+      </Awaited>
+    </Screen>
+  );
+}

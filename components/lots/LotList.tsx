@@ -1,0 +1,60 @@
+import { useState } from 'react';
+import { View } from 'react-native';
+import { EmptyState } from '@/components/ui/EmptyState';
+import { Row } from '@/components/ui/Row';
+import { SearchField } from '@/components/ui/SearchField';
+import { space } from '@/components/ui/tokens';
+import type { Lot } from '@/shared/contracts/lots';
+import { formatDate } from '@/shared/units/format';
+import { dueWords } from './apertureWords';
+import { LotStrip } from './LotStrip';
+
+export interface LotListProps {
+  lots: readonly Lot[];
+  selectedId?: string;
+  /** Narrow: beside the lot that is open. */
+  narrow?: boolean;
+}
+
+/** Lots with how far each is, to be searched by number, client or order. */
+export function LotList({ lots, selectedId, narrow }: LotListProps) {
+  const [search, setSearch] = useState('');
+  const wanted = search.trim().toLowerCase();
+  const found = lots.filter((lot) =>
+    `${lot.number} ${lot.clientName} ${lot.orderReference}`.toLowerCase().includes(wanted),
+  );
+  return (
+    <View style={{ gap: space.hair }}>
+      {lots.length > 5 ? (
+        <SearchField label="Search lots" placeholder="Number, client or order" value={search} onChange={setSearch} />
+      ) : null}
+      {found.map((lot) => (
+        <Row
+          key={lot.id}
+          icon="lots"
+          title={lot.number}
+          aside={narrow ? undefined : lot.clientName}
+          subtitle={
+            narrow
+              ? lot.clientName
+              : [
+                  `${lot.apertureCount} ${lot.apertureCount === 1 ? 'aperture' : 'apertures'}`,
+                  dueWords(lot.dueOn === null ? null : formatDate(lot.dueOn)),
+                ].join(', ')
+          }
+          href={`/lots/${lot.id}`}
+          selected={lot.id === selectedId}
+          trailing={
+            <LotStrip
+              apertureCount={lot.apertureCount}
+              measuredCount={lot.measuredCount}
+              refusedCount={lot.refusedCount}
+              style={{ width: narrow ? 72 : 118 }}
+            />
+          }
+        />
+      ))}
+      {found.length === 0 && lots.length > 0 ? <EmptyState sentence={`No lot fits “${search}”.`} /> : null}
+    </View>
+  );
+}
