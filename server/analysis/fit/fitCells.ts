@@ -149,6 +149,11 @@ export function fitCells(cells: Cells, optics: PinholeOptics, noise: NoiseModel,
     }
     let decrement = 0;
     for (let i = 0; i < p; i++) decrement += step[i] * gradient[i];
+    // A step this short moves no parameter by a thirtieth of its standard uncertainty.
+    if (decrement < 1e-3 && damping === 0) {
+      converged = true;
+      break;
+    }
     const tried = { ...values };
     free.forEach((name, i) => (tried[name] += step[i]));
     const next = admissible(tried, values) ? cellModel(cells, optics, tried, true) : null;
@@ -163,10 +168,6 @@ export function fitCells(cells: Cells, optics: PinholeOptics, noise: NoiseModel,
     ({ normal, gradient, variance } = assemble(cells, noise, evaluated, columns));
     cost = chiSquare(cells, evaluated.model, variance);
     damping = damping < 1e-4 ? 0 : damping / 10;
-    if (decrement < 1e-4 && damping === 0) {
-      converged = true;
-      break;
-    }
   }
   return {
     values,
