@@ -25,7 +25,11 @@ export interface MeasureOutput {
  * Measures one case. Bad input never throws: a file that cannot be used ends as `failed`, a frame that cannot be
  * measured as `refused`, both in words.
  */
-export async function measure(measureCase: MeasureCase, files: MeasureFiles, onStage?: (stage: Stage) => void): Promise<MeasureOutput> {
+export async function measure(
+  measureCase: MeasureCase,
+  files: MeasureFiles,
+  onStage?: (stage: Stage) => void,
+): Promise<MeasureOutput> {
   const watch = new Stopwatch(onStage);
   const failed = (reason: FailureReason, message: string): MeasureOutput => ({
     result: { id: measureCase.id, status: 'failed', reason, message },
@@ -38,10 +42,16 @@ export async function measure(measureCase: MeasureCase, files: MeasureFiles, onS
     misfit: null,
   });
   if (measureCase.scan !== undefined) {
-    return failed('unsupported', 'Scans of a detector are not measured by this version. Give a frame of a camera sensor.');
+    return failed(
+      'unsupported',
+      'Scans of a detector are not measured by this version. Give a frame of a camera sensor.',
+    );
   }
   if (measureCase.raw !== undefined) {
-    return failed('unsupported', 'Headerless raw files are not read by this version. Send the frame as a 16-bit TIFF, PNG, PGM or FITS file.');
+    return failed(
+      'unsupported',
+      'Headerless raw files are not read by this version. Send the frame as a 16-bit TIFF, PNG, PGM or FITS file.',
+    );
   }
   if (files.frames.length === 0) return failed('bad-case', 'frame: no frame was given.');
   if (files.frames.length > 1) {
@@ -73,6 +83,7 @@ export async function measure(measureCase: MeasureCase, files: MeasureFiles, onS
 /** Darks and flats are decoded with the light frame's significant bits, so that their counts mean the same. */
 async function decodeAll(files: Buffer[], { camera }: MeasureCase, light: DecodedFrame): Promise<DecodedFrame[]> {
   const decoded: DecodedFrame[] = [];
-  for (const file of files) decoded.push(await decodeFrame(file, { ...camera, bitDepth: camera.bitDepth ?? Math.min(16, light.bitDepth) }));
+  for (const file of files)
+    decoded.push(await decodeFrame(file, { ...camera, bitDepth: camera.bitDepth ?? Math.min(16, light.bitDepth) }));
   return decoded;
 }

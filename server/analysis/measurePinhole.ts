@@ -33,7 +33,11 @@ const POOR_FIT = 0.01;
 const FIRST_DARK = 3.83;
 
 /** Measures a calibrated frame as a pinhole's pattern, or says why it cannot be. */
-export function measurePinhole(frame: CalibratedFrame, measureCase: MeasureCase, watch: Stopwatch): PinholeMeasurement | Refusal {
+export function measurePinhole(
+  frame: CalibratedFrame,
+  measureCase: MeasureCase,
+  watch: Stopwatch,
+): PinholeMeasurement | Refusal {
   const optics = pinholeOptics(measureCase);
   watch.begin('centre');
   const centres = findCentre(frame);
@@ -41,7 +45,11 @@ export function measurePinhole(frame: CalibratedFrame, measureCase: MeasureCase,
   const found = bestFit(frame, optics, centres);
   const verdict = judgePinhole(frame, optics, centres, found);
   if ('refusal' in verdict) return verdict.refusal;
-  if (found === null) return { reason: 'centre-not-found', message: 'No centre of rings was found in this frame. Check that the pattern falls on the sensor.' };
+  if (found === null)
+    return {
+      reason: 'centre-not-found',
+      message: 'No centre of rings was found in this frame. Check that the pattern falls on the sensor.',
+    };
   const spread = joinPrior(found, optics, frame.hasFlats);
   const { values } = spread;
   watch.begin('profile');
@@ -50,7 +58,11 @@ export function measurePinhole(frame: CalibratedFrame, measureCase: MeasureCase,
   const profile = profileOfCells(cells, evaluated.model);
   const rings = ringTable(profile, values, optics, frame.noise);
   if (rings.length === 0) {
-    return { reason: 'too-few-rings', message: 'No single ring stands out of the noise, so nothing supports the size. Lengthen the exposure or move the camera so that more rings fall on the sensor.' };
+    return {
+      reason: 'too-few-rings',
+      message:
+        'No single ring stands out of the noise, so nothing supports the size. Lengthen the exposure or move the camera so that more rings fall on the sensor.',
+    };
   }
   watch.begin('fit');
   const sizeMm = 2 * radiusOf(values);
@@ -59,11 +71,20 @@ export function measurePinhole(frame: CalibratedFrame, measureCase: MeasureCase,
   const rendered = frame.flags.includes('camera-rendered');
   const tally = budget(sizeUm, spread, measureCase, optics.distanceMm, rendered, found.shape === 'tilted');
   const residual = misfit(frame, optics, values, found.fit.free.length);
-  const opinion = secondOpinion(frame, optics, values.illumination, sizeMm, whyNoOpinion(frame, found, values.x, values.y, rendered));
+  const opinion = secondOpinion(
+    frame,
+    optics,
+    values.illumination,
+    sizeMm,
+    whyNoOpinion(frame, found, values.x, values.y, rendered),
+  );
   const ringSize = sizeOfDarkRings(rings);
   const own = Math.hypot(spread.fit, spread.response, spread.illumination) * sizeUm;
   const disagree =
-    opinion.sizeUm !== null && opinion.standardUncertaintyUm !== null && Math.abs(opinion.sizeUm - sizeUm) > DISAGREEMENT * Math.hypot(own, opinion.standardUncertaintyUm) && Math.abs(opinion.sizeUm / sizeUm - 1) > 0.003;
+    opinion.sizeUm !== null &&
+    opinion.standardUncertaintyUm !== null &&
+    Math.abs(opinion.sizeUm - sizeUm) > DISAGREEMENT * Math.hypot(own, opinion.standardUncertaintyUm) &&
+    Math.abs(opinion.sizeUm / sizeUm - 1) > 0.003;
   const flags = flagsOf(frame, found, verdict.judgement, {
     unevenLight: spread.unevenLight,
     fresnelNumber,
@@ -88,7 +109,10 @@ export function measurePinhole(frame: CalibratedFrame, measureCase: MeasureCase,
       expandedUncertaintyUm: tally.expandedUncertaintyUm,
       coverageFactor: tally.coverageFactor,
       effectiveDegreesOfFreedom: tally.effectiveDegreesOfFreedom,
-      axesUm: found.shape === 'oval' ? { major: sizeUm * stretch, minor: sizeUm / stretch, angleDeg: angleOf(values.ovalCos, values.ovalSin) } : null,
+      axesUm:
+        found.shape === 'oval'
+          ? { major: sizeUm * stretch, minor: sizeUm / stretch, angleDeg: angleOf(values.ovalCos, values.ovalSin) }
+          : null,
       angleDeg: null,
       fringeScaleUm: null,
       fringeScaleUncertaintyUm: null,
@@ -105,7 +129,16 @@ export function measurePinhole(frame: CalibratedFrame, measureCase: MeasureCase,
       fresnelNumber,
       flags,
       budget: tally.lines,
-      assumed: assumptions(frame, measureCase, found, values.tiltX, values.tiltY, spread.unevenLight, values.illumination, sizeMm),
+      assumed: assumptions(
+        frame,
+        measureCase,
+        found,
+        values.tiltX,
+        values.tiltY,
+        spread.unevenLight,
+        values.illumination,
+        sizeMm,
+      ),
       engine: ENGINE,
       timingsMs: watch.timings() satisfies Timings,
     },
@@ -115,12 +148,20 @@ export function measurePinhole(frame: CalibratedFrame, measureCase: MeasureCase,
 }
 
 /** The fit from the centre whose rings explain most; a second centre is tried when it explains nearly as much. */
-function bestFit(frame: CalibratedFrame, optics: PinholeOptics, centres: ReturnType<typeof findCentre>): PinholeFit | null {
+function bestFit(
+  frame: CalibratedFrame,
+  optics: PinholeOptics,
+  centres: ReturnType<typeof findCentre>,
+): PinholeFit | null {
   let best: PinholeFit | null = null;
   for (const centre of centres.slice(0, 2)) {
     if (centre.score < centres[0].score - 0.05) break;
     const fit = fitPinhole(frame, optics, centre);
-    if (fit !== null && (best === null || fit.fit.cellChiSquare / fit.fit.cellCount < best.fit.cellChiSquare / best.fit.cellCount)) best = fit;
+    if (
+      fit !== null &&
+      (best === null || fit.fit.cellChiSquare / fit.fit.cellCount < best.fit.cellChiSquare / best.fit.cellCount)
+    )
+      best = fit;
   }
   return best;
 }
@@ -132,12 +173,21 @@ function angleOf(cos: number, sin: number): number {
 }
 
 function isCropped(frame: CalibratedFrame, x: number, y: number, firstDarkPx: number): boolean {
-  return x < firstDarkPx || y < firstDarkPx || x > frame.widthPx - 1 - firstDarkPx || y > frame.heightPx - 1 - firstDarkPx;
+  return (
+    x < firstDarkPx || y < firstDarkPx || x > frame.widthPx - 1 - firstDarkPx || y > frame.heightPx - 1 - firstDarkPx
+  );
 }
 
-function whyNoOpinion(frame: CalibratedFrame, found: PinholeFit, x: number, y: number, rendered: boolean): string | null {
+function whyNoOpinion(
+  frame: CalibratedFrame,
+  found: PinholeFit,
+  x: number,
+  y: number,
+  rendered: boolean,
+): string | null {
   if (frame.clippedFraction > 0) return 'The core is clipped, and the transform needs all of the light.';
-  if (isCropped(frame, x, y, (FIRST_DARK / Math.PI) * found.fringePx)) return 'The pattern is cropped, and the transform needs all of it.';
+  if (isCropped(frame, x, y, (FIRST_DARK / Math.PI) * found.fringePx))
+    return 'The pattern is cropped, and the transform needs all of it.';
   if (frame.step > 1) return 'A colour mosaic samples the frame too coarsely for the transform.';
   if (rendered) return 'The tone curve of a rendered frame changes the transform.';
   if (found.shape !== 'round') return 'The pattern is not round, and the transform was fitted for round holes only.';
@@ -168,14 +218,29 @@ function flagsOf(frame: CalibratedFrame, found: PinholeFit, judgement: PinholeJu
   if (inputs.unevenLight) flags.add('uneven-illumination');
   if (inputs.disagree) flags.add('opinions-disagree');
   if (found.fringePx < 4) flags.add('under-sampled');
-  if (judgement.second !== null && judgement.second.explained > 0.5 && judgement.second.relative > 0.004) flags.add('second-pattern');
+  if (judgement.second !== null && judgement.second.explained > 0.5 && judgement.second.relative > 0.004)
+    flags.add('second-pattern');
   if (frame.defectCount > frame.counts.length * 2e-3) flags.add('hot-pixels');
   if (inputs.outliers > frame.counts.length * 2e-3 && !flags.has('second-pattern')) flags.add('dust');
-  if (judgement.unexplained > POOR_FIT && found.fit.cellChiSquare / found.fit.cellCount > 2 && !flags.has('camera-rendered')) flags.add('poor-fit');
+  if (
+    judgement.unexplained > POOR_FIT &&
+    found.fit.cellChiSquare / found.fit.cellCount > 2 &&
+    !flags.has('camera-rendered')
+  )
+    flags.add('poor-fit');
   return [...flags];
 }
 
-function assumptions(frame: CalibratedFrame, measureCase: MeasureCase, found: PinholeFit, tiltX: number, tiltY: number, unevenLight: boolean, illumination: number, sizeMm: number): string[] {
+function assumptions(
+  frame: CalibratedFrame,
+  measureCase: MeasureCase,
+  found: PinholeFit,
+  tiltX: number,
+  tiltY: number,
+  unevenLight: boolean,
+  illumination: number,
+  sizeMm: number,
+): string[] {
   const said = [...frame.assumed];
   const { uncertainty } = measureCase;
   const missing = [
@@ -183,12 +248,21 @@ function assumptions(frame: CalibratedFrame, measureCase: MeasureCase, found: Pi
     uncertainty?.distanceMm === undefined ? 'distance' : null,
     uncertainty?.pixelPitchUm === undefined ? 'pixel pitch' : null,
   ].filter((m) => m !== null);
-  if (missing.length > 0) said.push(`No uncertainty of ${missing.join(', ')} was given; the budget holds only what the frame itself shows.`);
-  if (!frame.hasFlats) said.push('No flat was given: a smooth unevenness of the pixel response of 0.1 % was assumed beside what the misfit shows.');
-  if (found.shape === 'oval') said.push('An oval hole and a tilted sensor look nearly alike in one frame; here the oval fits better. Turn the aperture by 90° and measure again to tell them apart.');
+  if (missing.length > 0)
+    said.push(`No uncertainty of ${missing.join(', ')} was given; the budget holds only what the frame itself shows.`);
+  if (!frame.hasFlats)
+    said.push(
+      'No flat was given: a smooth unevenness of the pixel response of 0.1 % was assumed beside what the misfit shows.',
+    );
+  if (found.shape === 'oval')
+    said.push(
+      'An oval hole and a tilted sensor look nearly alike in one frame; here the oval fits better. Turn the aperture by 90° and measure again to tell them apart.',
+    );
   if (found.shape === 'tilted') {
     const degrees = (radians: number) => ((radians * 180) / Math.PI).toFixed(1);
-    said.push(`The rings are stretched as on a sensor tilted by ${degrees(tiltX)}° across and ${degrees(tiltY)}° down; the size is corrected for it.`);
+    said.push(
+      `The rings are stretched as on a sensor tilted by ${degrees(tiltX)}° across and ${degrees(tiltY)}° down; the size is corrected for it.`,
+    );
   }
   if (unevenLight) {
     said.push(

@@ -25,7 +25,9 @@ export class Stopwatch {
 
   timings(): Timings {
     this.end();
-    const rounded = Object.fromEntries(Object.entries(this.spent).map(([stage, ms]) => [stage, Math.round(ms * 10) / 10])) as Record<Stage, number>;
+    const rounded = Object.fromEntries(
+      Object.entries(this.spent).map(([stage, ms]) => [stage, Math.round(ms * 10) / 10]),
+    ) as Record<Stage, number>;
     return { ...rounded, total: Math.round((performance.now() - this.began) * 10) / 10 };
   }
 

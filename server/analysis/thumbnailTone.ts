@@ -21,7 +21,9 @@ export function thumbnailTone(
   const height = Math.max(1, Math.round(heightPx * scale));
   const sums = new Float64Array(width * height);
   const numbers = new Uint32Array(width * height);
-  const column = Uint16Array.from({ length: widthPx }, (_, x) => Math.min(width - 1, Math.floor((x * width) / widthPx)));
+  const column = Uint16Array.from({ length: widthPx }, (_, x) =>
+    Math.min(width - 1, Math.floor((x * width) / widthPx)),
+  );
   for (let y = 0; y < heightPx; y++) {
     const row = Math.min(height - 1, Math.floor((y * height) / heightPx)) * width;
     for (let x = 0; x < widthPx; x++) {

@@ -41,7 +41,8 @@ export function calibrateFrame({ light, darks, flats, measureCase }: Calibration
   const assumed = [...light.notes];
   const mask = new Uint8Array(widthPx * heightPx);
 
-  const mosaic = measureCase.mosaic === 'auto' ? light.mosaic : measureCase.mosaic === 'mono' ? null : measureCase.mosaic;
+  const mosaic =
+    measureCase.mosaic === 'auto' ? light.mosaic : measureCase.mosaic === 'mono' ? null : measureCase.mosaic;
   let step = 1;
   if (mosaic !== null) {
     const colour = maskOtherColours(light.data, mask, widthPx, heightPx, mosaic);
@@ -56,7 +57,10 @@ export function calibrateFrame({ light, darks, flats, measureCase }: Calibration
   if (rendered || srgb) flags.push('camera-rendered');
 
   const { clipCount, flatTop } = clipLevel(light.data, whiteCount);
-  if (flatTop) assumed.push(`The frame is clipped at ${Math.round(clipCount)} counts, below the nominal white level of ${Math.round(whiteCount)}.`);
+  if (flatTop)
+    assumed.push(
+      `The frame is clipped at ${Math.round(clipCount)} counts, below the nominal white level of ${Math.round(whiteCount)}.`,
+    );
   let clipped = 0;
   let usable = 0;
   for (let i = 0; i < mask.length; i++) {
@@ -84,7 +88,9 @@ export function calibrateFrame({ light, darks, flats, measureCase }: Calibration
     const recorded = srgb ? 0 : (camera.blackCount ?? light.blackCount);
     blackCount = recorded ?? darkestLevel(source, mask);
     if (recorded === null || recorded === undefined) {
-      assumed.push(`No darks and no black level were given: black was taken from the darkest part of the frame, ${blackCount.toFixed(1)} counts, and the fit finds the rest of the background.`);
+      assumed.push(
+        `No darks and no black level were given: black was taken from the darkest part of the frame, ${blackCount.toFixed(1)} counts, and the fit finds the rest of the background.`,
+      );
     } else if (camera.blackCount === undefined && !srgb) {
       assumed.push(`The black level is the file's own, ${blackCount.toFixed(1)} counts.`);
     }
@@ -159,7 +165,10 @@ function divideFlat(counts: Float32Array, mask: Uint8Array, flats: DecodedFrame[
   const { mean } = masterFrame(flats.map((f) => f.data));
   const level = medianOf(mean) - blackCount;
   if (!(level > 0)) {
-    throw new FrameProblem('unsupported', 'The flat frames hold no light above black. Take flats with the sensor lit evenly to about half of its range.');
+    throw new FrameProblem(
+      'unsupported',
+      'The flat frames hold no light above black. Take flats with the sensor lit evenly to about half of its range.',
+    );
   }
   for (let i = 0; i < counts.length; i++) {
     const response = (mean[i] - blackCount) / level;

@@ -10,7 +10,10 @@ const CROWD = 6;
  * @param data counts as stored
  * @param whiteCount nominal white level
  */
-export function clipLevel(data: Uint16Array | Float32Array, whiteCount: number): { clipCount: number; flatTop: boolean } {
+export function clipLevel(
+  data: Uint16Array | Float32Array,
+  whiteCount: number,
+): { clipCount: number; flatTop: boolean } {
   const top = Math.ceil(whiteCount);
   const bins = Math.min(65_536, Math.max(2, top + 1));
   const width = (top + 1) / bins;

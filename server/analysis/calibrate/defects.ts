@@ -10,7 +10,14 @@ const LIMIT = 7;
  * @param step distance between neighbours of one colour
  * @returns how many were marked
  */
-export function markFrameDefects(counts: Float32Array, mask: Uint8Array, widthPx: number, heightPx: number, step: number, noise: NoiseModel): number {
+export function markFrameDefects(
+  counts: Float32Array,
+  mask: Uint8Array,
+  widthPx: number,
+  heightPx: number,
+  step: number,
+  noise: NoiseModel,
+): number {
   const around = new Float64Array(8);
   const offsets = [-1, 1, -widthPx, widthPx, -widthPx - 1, -widthPx + 1, widthPx - 1, widthPx + 1].map((o) => o * step);
   const found: number[] = [];
@@ -45,7 +52,10 @@ export function markDarkDefects(dark: Float32Array, mask: Uint8Array, singleVari
   for (let i = 0; i < dark.length; i += step) some.push(dark[i]);
   some.sort((a, b) => a - b);
   const median = some[some.length >> 1];
-  const spread = 1.4826 * Math.max(some[Math.floor(some.length * 0.75)] - median, median - some[Math.floor(some.length * 0.25)]) * 1.0;
+  const spread =
+    1.4826 *
+    Math.max(some[Math.floor(some.length * 0.75)] - median, median - some[Math.floor(some.length * 0.25)]) *
+    1.0;
   const limit = LIMIT * Math.max(Math.sqrt(singleVariance), spread);
   let marked = 0;
   for (let i = 0; i < dark.length; i++) {

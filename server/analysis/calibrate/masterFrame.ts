@@ -40,7 +40,8 @@ export function masterFrame(planes: (Uint16Array | Float32Array)[]): MasterFrame
     mean[i] = sum / exposures;
     if (exposures < 3 || high - low <= limit) continue;
     const sorted = values.slice().sort();
-    const median = exposures % 2 === 1 ? sorted[exposures >> 1] : (sorted[exposures / 2 - 1] + sorted[exposures / 2]) / 2;
+    const median =
+      exposures % 2 === 1 ? sorted[exposures >> 1] : (sorted[exposures / 2 - 1] + sorted[exposures / 2]) / 2;
     let kept = 0;
     let keptSum = 0;
     for (let k = 0; k < exposures; k++) {

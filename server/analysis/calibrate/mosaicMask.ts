@@ -8,7 +8,13 @@ const NAMES: Record<string, string> = { r: 'red', g: 'green', b: 'blue' };
  * stay, at their true positions; nothing is interpolated.
  * @returns the colour that stays, in words
  */
-export function maskOtherColours(data: Uint16Array | Float32Array, mask: Uint8Array, widthPx: number, heightPx: number, mosaic: Mosaic): string {
+export function maskOtherColours(
+  data: Uint16Array | Float32Array,
+  mask: Uint8Array,
+  widthPx: number,
+  heightPx: number,
+  mosaic: Mosaic,
+): string {
   const range = new Map<string, number>();
   for (const colour of ['r', 'g', 'b']) {
     const some: number[] = [];

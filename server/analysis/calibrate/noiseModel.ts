@@ -46,7 +46,8 @@ export function noiseModel(
   const notes: string[] = [];
   const gain = camera.electronsPerCount;
   if (gain === undefined) {
-    if (free.perCount > 0) notes.push(`The gain was estimated from the frame: ${(1 / free.perCount).toPrecision(3)} electrons a count.`);
+    if (free.perCount > 0)
+      notes.push(`The gain was estimated from the frame: ${(1 / free.perCount).toPrecision(3)} electrons a count.`);
     return { noise: { ...free, source: 'frame' }, notes };
   }
   const read = camera.readNoiseElectrons;
@@ -59,7 +60,9 @@ export function noiseModel(
     worst = Math.max(worst, ratio, 1 / ratio);
   }
   if (worst > RECORD_TOLERANCE) {
-    notes.push('The noise of the frame does not agree with the gain and read noise on record; the noise found in the frame was used.');
+    notes.push(
+      'The noise of the frame does not agree with the gain and read noise on record; the noise found in the frame was used.',
+    );
     return { noise: { ...free, source: 'frame' }, notes };
   }
   return { noise: { ...recorded, source: 'record' }, notes };

@@ -44,7 +44,10 @@ export function reducePlane(frame: CalibratedFrame, longest: number = LONGEST): 
       const at = by * widthPx + bx;
       good[at] = 1;
       // ∫ dI/σ(I) with σ² = floor + perCount·I.
-      level[at] = noise.perCount > 0 && mean > 0 ? (2 / noise.perCount) * (Math.sqrt(varianceAt({ ...noise, perSquare: 0 }, mean)) - quiet) : mean / quiet;
+      level[at] =
+        noise.perCount > 0 && mean > 0
+          ? (2 / noise.perCount) * (Math.sqrt(varianceAt({ ...noise, perSquare: 0 }, mean)) - quiet)
+          : mean / quiet;
       level[at] *= Math.sqrt(n);
     }
   }

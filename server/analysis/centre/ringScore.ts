@@ -5,7 +5,10 @@ import type { ReducedPlane } from './reducePlane';
  * variance, 0 to 1. Rings are one reduced pixel wide.
  */
 export function ringScore({ widthPx, heightPx, level, good }: ReducedPlane, cx: number, cy: number): number {
-  const reach = Math.ceil(Math.hypot(Math.max(Math.abs(cx), Math.abs(widthPx - cx)), Math.max(Math.abs(cy), Math.abs(heightPx - cy)))) + 2;
+  const reach =
+    Math.ceil(
+      Math.hypot(Math.max(Math.abs(cx), Math.abs(widthPx - cx)), Math.max(Math.abs(cy), Math.abs(heightPx - cy))),
+    ) + 2;
   const n = new Float64Array(reach);
   const sum = new Float64Array(reach);
   const squares = new Float64Array(reach);

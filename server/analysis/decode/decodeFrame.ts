@@ -18,7 +18,10 @@ import { settleBits } from './settleBits';
 export async function decodeFrame(bytes: Buffer, camera: CameraRecord): Promise<DecodedFrame> {
   if (bytes.length === 0) throw new FrameProblem('unreadable', 'The file is empty. Send it again.');
   if (bytes.length > MAX_FILE_BYTES) {
-    throw new FrameProblem('too-large', `The file is larger than ${MAX_FILE_BYTES / 1024 / 1024} MB. Send a region of the sensor around the pattern.`);
+    throw new FrameProblem(
+      'too-large',
+      `The file is larger than ${MAX_FILE_BYTES / 1024 / 1024} MB. Send a region of the sensor around the pattern.`,
+    );
   }
   return settleBits(await readStored(bytes), camera.bitDepth);
 }
@@ -36,15 +39,27 @@ async function readStored(bytes: Buffer): Promise<StoredSamples> {
     case 'jpeg':
       return readWithSharp(bytes, { name: 'JPEG', exposureMs: jpegExposureMs(bytes) });
     case 'heic':
-      throw new FrameProblem('unsupported', 'HEIC pictures are not decoded. Set the phone to store JPEG ("most compatible"), or send its raw DNG.');
+      throw new FrameProblem(
+        'unsupported',
+        'HEIC pictures are not decoded. Set the phone to store JPEG ("most compatible"), or send its raw DNG.',
+      );
     case 'gif':
     case 'bmp':
     case 'webp':
-      throw new FrameProblem('unsupported', 'This picture format is not measured. Send a TIFF or PNG of 8 or 16 bits as the camera stored it.');
+      throw new FrameProblem(
+        'unsupported',
+        'This picture format is not measured. Send a TIFF or PNG of 8 or 16 bits as the camera stored it.',
+      );
     case 'raw':
-      throw new FrameProblem('unsupported', 'This maker\'s raw format is not decoded. Convert it to an uncompressed DNG or a 16-bit TIFF and send that.');
+      throw new FrameProblem(
+        'unsupported',
+        "This maker's raw format is not decoded. Convert it to an uncompressed DNG or a 16-bit TIFF and send that.",
+      );
     default:
-      throw new FrameProblem('unsupported', 'This is no picture format that is known here. Send a TIFF or PNG of 8 or 16 bits as the camera stored it.');
+      throw new FrameProblem(
+        'unsupported',
+        'This is no picture format that is known here. Send a TIFF or PNG of 8 or 16 bits as the camera stored it.',
+      );
   }
 }
 
@@ -55,7 +70,10 @@ function readPng(bytes: Buffer): Promise<StoredSamples> {
   const bits = bytes.readUInt8(24);
   const colour = bytes.readUInt8(25);
   if ((bits !== 8 && bits !== 16) || colour === 3) {
-    throw new FrameProblem('unsupported', 'A PNG with a palette or fewer than 8 bits is not measured. Send 8 or 16 bits a sample.');
+    throw new FrameProblem(
+      'unsupported',
+      'A PNG with a palette or fewer than 8 bits is not measured. Send 8 or 16 bits a sample.',
+    );
   }
   checkDimensions(bytes.readUInt32BE(16), bytes.readUInt32BE(20), bits / 8, bytes.length, true);
   return readWithSharp(bytes, { name: 'PNG', exposureMs: null });
@@ -69,7 +87,9 @@ function jpegExposureMs(bytes: Buffer): number | null {
     const length = bytes.readUInt16BE(at + 2);
     if (marker === 0xe1 && bytes.toString('latin1', at + 4, at + 8) === 'Exif') {
       try {
-        return exposureMsOf(readTiffDirectories(bytes.subarray(at + 10, Math.min(bytes.length, at + 2 + length))).directories);
+        return exposureMsOf(
+          readTiffDirectories(bytes.subarray(at + 10, Math.min(bytes.length, at + 2 + length))).directories,
+        );
       } catch {
         return null;
       }

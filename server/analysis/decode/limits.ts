@@ -23,7 +23,10 @@ export function checkDimensions(
   compressed: boolean,
 ): void {
   if (!Number.isInteger(widthPx) || !Number.isInteger(heightPx) || widthPx < 1 || heightPx < 1) {
-    throw new FrameProblem('unreadable', 'The file states no usable width and height. Send the frame again as the camera stored it.');
+    throw new FrameProblem(
+      'unreadable',
+      'The file states no usable width and height. Send the frame again as the camera stored it.',
+    );
   }
   if (widthPx * heightPx > MAX_PIXELS) {
     throw new FrameProblem(

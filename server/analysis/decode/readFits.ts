@@ -21,11 +21,13 @@ export function readFits(bytes: Buffer): StoredSamples {
       const card = bytes.toString('latin1', at + c * 80, at + c * 80 + 80);
       const key = card.slice(0, 8).trim();
       if (key === 'END') ended = true;
-      else if (card.slice(8, 10) === '= ' && !cards.has(key)) cards.set(key, (card.slice(10).split('/')[0] ?? '').trim());
+      else if (card.slice(8, 10) === '= ' && !cards.has(key))
+        cards.set(key, (card.slice(10).split('/')[0] ?? '').trim());
     }
     at += BLOCK;
   }
-  if (!ended) throw new FrameProblem('unreadable', 'The FITS header does not end; the file seems cut off. Send it again.');
+  if (!ended)
+    throw new FrameProblem('unreadable', 'The FITS header does not end; the file seems cut off. Send it again.');
   const number = (key: string, otherwise: number) => {
     const text = cards.get(key);
     const read = text === undefined ? NaN : Number(text.replace(/D/i, 'E'));

@@ -10,7 +10,10 @@ import { checkDimensions } from './limits';
 export function readPnm(bytes: Buffer): StoredSamples {
   const kind = bytes.toString('latin1', 0, 2);
   if (kind !== 'P5') {
-    throw new FrameProblem('unsupported', `A portable bitmap of kind ${kind} is not measured. Send a binary graymap (P5) or a 16-bit TIFF.`);
+    throw new FrameProblem(
+      'unsupported',
+      `A portable bitmap of kind ${kind} is not measured. Send a binary graymap (P5) or a 16-bit TIFF.`,
+    );
   }
   const header = bytes.toString('latin1', 2, Math.min(bytes.length, 4096));
   const fields: number[] = [];

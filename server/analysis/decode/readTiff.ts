@@ -17,7 +17,24 @@ const CFA = 32_803;
 const LINEAR_RAW = 34_892;
 const JPEG = 7;
 /** Tags that the decoder for mosaics and odd depths needs. */
-const PASSED_TAGS = [WIDTH, HEIGHT, BITS, COMPRESSION, PHOTOMETRIC, 266, 273, SAMPLES, 278, 279, 284, 317, 322, 323, 324, 325];
+const PASSED_TAGS = [
+  WIDTH,
+  HEIGHT,
+  BITS,
+  COMPRESSION,
+  PHOTOMETRIC,
+  266,
+  273,
+  SAMPLES,
+  278,
+  279,
+  284,
+  317,
+  322,
+  323,
+  324,
+  325,
+];
 
 /**
  * Reads a TIFF, or a DNG with a colour mosaic. Plain grey or RGB samples of 8 or 16 bits go through sharp; mosaics and
@@ -29,7 +46,9 @@ const PASSED_TAGS = [WIDTH, HEIGHT, BITS, COMPRESSION, PHOTOMETRIC, 266, 273, SA
 export async function readTiff(bytes: Buffer): Promise<StoredSamples> {
   const { littleEndian, directories } = readTiffDirectories(bytes);
   const exposureMs = exposureMsOf(directories);
-  const raw = directories.find((d) => d.numbers.get(PHOTOMETRIC)?.[0] === CFA && first(d, 254) === 0) ?? directories.find((d) => d.numbers.get(PHOTOMETRIC)?.[0] === CFA);
+  const raw =
+    directories.find((d) => d.numbers.get(PHOTOMETRIC)?.[0] === CFA && first(d, 254) === 0) ??
+    directories.find((d) => d.numbers.get(PHOTOMETRIC)?.[0] === CFA);
   const directory = raw ?? directories[0];
   const bits = directory.numbers.get(BITS) ?? [1];
   const compression = first(directory, COMPRESSION) ?? 1;
@@ -39,20 +58,37 @@ export async function readTiff(bytes: Buffer): Promise<StoredSamples> {
   const format = first(directory, FORMAT) ?? 1;
   checkDimensions(widthPx, heightPx, ((bits[0] ?? 1) * samples) / 8, bytes.length, compression !== 1);
   if (format === 3 || (bits[0] ?? 1) > 16) {
-    throw new FrameProblem('unsupported', `TIFF samples of ${bits[0]} bits${format === 3 ? ' floating point' : ''} are not read. Send unsigned integers of 16 bits.`);
+    throw new FrameProblem(
+      'unsupported',
+      `TIFF samples of ${bits[0]} bits${format === 3 ? ' floating point' : ''} are not read. Send unsigned integers of 16 bits.`,
+    );
   }
-  if (format === 2) throw new FrameProblem('unsupported', 'TIFF samples with a sign are not read. Send unsigned integers of 16 bits.');
+  if (format === 2)
+    throw new FrameProblem('unsupported', 'TIFF samples with a sign are not read. Send unsigned integers of 16 bits.');
   const photometric = first(directory, PHOTOMETRIC);
   if (photometric === LINEAR_RAW || photometric === 6) {
-    throw new FrameProblem('unsupported', 'This file holds a picture that was already developed. Send the raw mosaic, or a 16-bit grey TIFF.');
+    throw new FrameProblem(
+      'unsupported',
+      'This file holds a picture that was already developed. Send the raw mosaic, or a 16-bit grey TIFF.',
+    );
   }
   if (raw === undefined && (bits[0] === 8 || bits[0] === 16)) {
     return readWithSharp(bytes, { name: 'TIFF', exposureMs });
   }
   if (![8, 10, 12, 14, 16].includes(bits[0] ?? 0) || samples !== 1) {
-    throw new FrameProblem('unsupported', `A TIFF of ${bits[0]} bits and ${samples} channels is not measured. Send one grey channel of 8 or 16 bits.`);
+    throw new FrameProblem(
+      'unsupported',
+      `A TIFF of ${bits[0]} bits and ${samples} channels is not measured. Send one grey channel of 8 or 16 bits.`,
+    );
   }
-  return readPacked(bytes, directory, littleEndian, { widthPx, heightPx, bits: bits[0] ?? 16, compression, exposureMs, isMosaic: raw !== undefined });
+  return readPacked(bytes, directory, littleEndian, {
+    widthPx,
+    heightPx,
+    bits: bits[0] ?? 16,
+    compression,
+    exposureMs,
+    isMosaic: raw !== undefined,
+  });
 }
 
 interface PackedKind {
@@ -67,7 +103,10 @@ interface PackedKind {
 function readPacked(bytes: Buffer, directory: TiffDirectory, littleEndian: boolean, kind: PackedKind): StoredSamples {
   const { widthPx, heightPx, bits, compression } = kind;
   if (![1, 5, JPEG, 8].includes(compression)) {
-    throw new FrameProblem('unsupported', `This raw file is compressed in a way that is not read (${compression}). Send an uncompressed or losslessly compressed DNG, or a 16-bit TIFF.`);
+    throw new FrameProblem(
+      'unsupported',
+      `This raw file is compressed in a way that is not read (${compression}). Send an uncompressed or losslessly compressed DNG, or a 16-bit TIFF.`,
+    );
   }
   checkStrips(bytes, directory);
   const image: UTIF.IFD = { data: new Uint8Array(0), width: widthPx, height: heightPx };
@@ -79,14 +118,21 @@ function readPacked(bytes: Buffer, directory: TiffDirectory, littleEndian: boole
     const copy = bytes.buffer.slice(bytes.byteOffset, bytes.byteOffset + bytes.byteLength);
     UTIF.decodeImage(copy as ArrayBuffer, image);
   } catch {
-    throw new FrameProblem('unreadable', 'The pixels of this file are damaged and could not be decoded. Send it again as the camera stored it.');
+    throw new FrameProblem(
+      'unreadable',
+      'The pixels of this file are damaged and could not be decoded. Send it again as the camera stored it.',
+    );
   }
   const whole = unpackSamples(image.data, widthPx, heightPx, bits, littleEndian || compression === JPEG);
   const area = directory.numbers.get(50_829);
-  const active = area?.length === 4 && area[2] <= heightPx && area[3] <= widthPx && area[0] < area[2] && area[1] < area[3] ? area : [0, 0, heightPx, widthPx];
+  const active =
+    area?.length === 4 && area[2] <= heightPx && area[3] <= widthPx && area[0] < area[2] && area[1] < area[3]
+      ? area
+      : [0, 0, heightPx, widthPx];
   const [top, left, bottom, right] = active as [number, number, number, number];
   const data = new Uint16Array((right - left) * (bottom - top));
-  for (let y = top; y < bottom; y++) data.set(whole.subarray(y * widthPx + left, y * widthPx + right), (y - top) * (right - left));
+  for (let y = top; y < bottom; y++)
+    data.set(whole.subarray(y * widthPx + left, y * widthPx + right), (y - top) * (right - left));
   applyTable(data, directory.numbers.get(50_712));
   const black = directory.numbers.get(50_714)?.filter((b) => Number.isFinite(b));
   const white = first(directory, 50_717);
@@ -109,7 +155,10 @@ function readPacked(bytes: Buffer, directory: TiffDirectory, littleEndian: boole
 function checkStrips(bytes: Buffer, directory: TiffDirectory): void {
   const offsets = directory.numbers.get(273) ?? directory.numbers.get(324) ?? [];
   const lengths = directory.numbers.get(279) ?? directory.numbers.get(325) ?? [];
-  const good = offsets.length > 0 && offsets.length === lengths.length && offsets.every((o, i) => o + (lengths[i] ?? 0) <= bytes.length);
+  const good =
+    offsets.length > 0 &&
+    offsets.length === lengths.length &&
+    offsets.every((o, i) => o + (lengths[i] ?? 0) <= bytes.length);
   if (!good) throw new FrameProblem('unreadable', 'The pixels lie outside the file; it seems cut off. Send it again.');
 }
 
@@ -125,7 +174,10 @@ function mosaicOf(directory: TiffDirectory): Mosaic {
   const phases: Record<string, Mosaic> = { '0112': 'rggb', '1021': 'grbg', '1201': 'gbrg', '2110': 'bggr' };
   const phase = phases[pattern];
   if (phase === undefined || (directory.numbers.get(33_421)?.join() ?? '2,2') !== '2,2') {
-    throw new FrameProblem('unsupported', 'The colour mosaic of this file is not a pattern of two by two red, green and blue sites. Send a frame of a monochrome or Bayer camera.');
+    throw new FrameProblem(
+      'unsupported',
+      'The colour mosaic of this file is not a pattern of two by two red, green and blue sites. Send a frame of a monochrome or Bayer camera.',
+    );
   }
   return phase;
 }

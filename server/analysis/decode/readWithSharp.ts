@@ -25,11 +25,17 @@ export async function readWithSharp(bytes: Buffer, kind: SharpKind): Promise<Sto
     const about = await open().metadata();
     const wide = about.depth === 'ushort';
     if (!wide && about.depth !== 'uchar') {
-      throw new FrameProblem('unsupported', `${kind.name} samples of type ${about.depth} are not read. Send 8- or 16-bit samples.`);
+      throw new FrameProblem(
+        'unsupported',
+        `${kind.name} samples of type ${about.depth} are not read. Send 8- or 16-bit samples.`,
+      );
     }
     const channels = about.channels;
     if (about.space === 'cmyk' || channels > 4) {
-      throw new FrameProblem('unsupported', `A ${kind.name} with ${channels} channels is not measured. Send a grey frame of 16 bits.`);
+      throw new FrameProblem(
+        'unsupported',
+        `A ${kind.name} with ${channels} channels is not measured. Send a grey frame of 16 bits.`,
+      );
     }
     checkDimensions(about.width, about.height, 1, bytes.length, true);
     const colour = channels >= 3;
@@ -38,7 +44,9 @@ export async function readWithSharp(bytes: Buffer, kind: SharpKind): Promise<Sto
       .toColourspace(space)
       .raw({ depth: wide ? 'ushort' : 'uchar' })
       .toBuffer({ resolveWithObject: true });
-    const samples = wide ? new Uint16Array(data.buffer, data.byteOffset, data.byteLength / 2) : new Uint8Array(data.buffer, data.byteOffset, data.byteLength);
+    const samples = wide
+      ? new Uint16Array(data.buffer, data.byteOffset, data.byteLength / 2)
+      : new Uint8Array(data.buffer, data.byteOffset, data.byteLength);
     const pixels = info.width * info.height;
     if (samples.length !== pixels * info.channels) {
       throw new FrameProblem('unreadable', `The ${kind.name} could not be decoded whole. Send it again.`);
@@ -61,8 +69,14 @@ export async function readWithSharp(bytes: Buffer, kind: SharpKind): Promise<Sto
     if (error instanceof FrameProblem) throw error;
     const said = error instanceof Error ? (error.message.split('\n')[0] ?? '') : '';
     if (/pixel limit/i.test(said)) {
-      throw new FrameProblem('too-large', `The ${kind.name} declares more pixels than are decoded (${MAX_PIXELS / 1e6} megapixels). Send a region around the pattern.`);
+      throw new FrameProblem(
+        'too-large',
+        `The ${kind.name} declares more pixels than are decoded (${MAX_PIXELS / 1e6} megapixels). Send a region around the pattern.`,
+      );
     }
-    throw new FrameProblem('unreadable', `The ${kind.name} is damaged or cut off and could not be decoded. Send the file again as the camera stored it.`);
+    throw new FrameProblem(
+      'unreadable',
+      `The ${kind.name} is damaged or cut off and could not be decoded. Send the file again as the camera stored it.`,
+    );
   }
 }

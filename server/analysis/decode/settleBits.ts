@@ -27,13 +27,16 @@ export function settleBits(stored: StoredSamples, recordBits: number | undefined
   const notes = [...stored.notes];
   if (shift > 0) {
     for (let i = 0; i < data.length; i++) data[i] >>= shift;
-    notes.push(`The significant bits lay at the high end of ${storedBits}-bit samples; ${shift} empty low bits were taken off.`);
+    notes.push(
+      `The significant bits lay at the high end of ${storedBits}-bit samples; ${shift} empty low bits were taken off.`,
+    );
   }
   const needed = Math.max(1, 32 - Math.clz32(top >> shift));
   let bitDepth = recordBits ?? storedBits - shift;
   if (recordBits === undefined && shift === 0 && storedBits === 16) {
     bitDepth = Math.max(8, needed + (needed % 2));
-    if (bitDepth < 16) notes.push(`The brightest sample needs ${needed} bits; ${bitDepth} significant bits were assumed.`);
+    if (bitDepth < 16)
+      notes.push(`The brightest sample needs ${needed} bits; ${bitDepth} significant bits were assumed.`);
   }
   if (recordBits !== undefined && needed > recordBits) {
     bitDepth = needed;

@@ -1,4 +1,16 @@
-export const fileKinds = ['tiff', 'png', 'jpeg', 'pnm', 'fits', 'gif', 'bmp', 'heic', 'webp', 'raw', 'unknown'] as const;
+export const fileKinds = [
+  'tiff',
+  'png',
+  'jpeg',
+  'pnm',
+  'fits',
+  'gif',
+  'bmp',
+  'heic',
+  'webp',
+  'raw',
+  'unknown',
+] as const;
 export type FileKind = (typeof fileKinds)[number];
 
 /** The kind of a file from its first bytes alone; names and declared types are not looked at. */
@@ -16,6 +28,7 @@ export function sniffFormat(bytes: Buffer): FileKind {
   if (ascii(0, 2) === 'BM') return 'bmp';
   if (ascii(4, 8) === 'ftyp') return 'heic';
   if (ascii(0, 4) === 'RIFF' && ascii(8, 12) === 'WEBP') return 'webp';
-  if (ascii(0, 4) === 'IIU\0' || ascii(0, 4) === 'IIRO' || ascii(0, 8) === 'FUJIFILM' || ascii(6, 10) === 'HEAP') return 'raw';
+  if (ascii(0, 4) === 'IIU\0' || ascii(0, 4) === 'IIRO' || ascii(0, 8) === 'FUJIFILM' || ascii(6, 10) === 'HEAP')
+    return 'raw';
   return 'unknown';
 }

@@ -29,7 +29,10 @@ export function readTiffDirectories(bytes: Buffer): { littleEndian: boolean; dir
   const u32 = (at: number) => (littleEndian ? bytes.readUInt32LE(at) : bytes.readUInt32BE(at));
   const fits = (at: number, length: number) => at >= 0 && length >= 0 && at + length <= bytes.length;
   if (!fits(0, 8) || u16(2) !== 42) {
-    throw new FrameProblem('unsupported', 'This kind of TIFF (BigTIFF) is not read. Send a plain TIFF of 8 or 16 bits.');
+    throw new FrameProblem(
+      'unsupported',
+      'This kind of TIFF (BigTIFF) is not read. Send a plain TIFF of 8 or 16 bits.',
+    );
   }
   const seen = new Set<number>();
   const directories: TiffDirectory[] = [];
@@ -72,12 +75,18 @@ export function readTiffDirectories(bytes: Buffer): { littleEndian: boolean; dir
     seen.add(at);
     if (seen.size > MAX_DIRECTORIES || !fits(at, 2)) {
       if (directories.length > 0) break;
-      throw new FrameProblem('unreadable', 'The TIFF directory lies outside the file; it seems cut off. Send it again.');
+      throw new FrameProblem(
+        'unreadable',
+        'The TIFF directory lies outside the file; it seems cut off. Send it again.',
+      );
     }
     const count = u16(at);
     if (count === 0 || count > MAX_ENTRIES || !fits(at + 2, count * 12)) {
       if (directories.length > 0) break;
-      throw new FrameProblem('unreadable', 'The TIFF directory is damaged. Send the file again as the camera stored it.');
+      throw new FrameProblem(
+        'unreadable',
+        'The TIFF directory is damaged. Send the file again as the camera stored it.',
+      );
     }
     const directory: TiffDirectory = { numbers: new Map(), texts: new Map() };
     for (let e = 0; e < count; e++) {

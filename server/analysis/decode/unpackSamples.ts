@@ -4,7 +4,13 @@
  * @param littleEndian byte order of 16-bit samples; packed samples have none
  * @returns row-major counts, length widthPx * heightPx
  */
-export function unpackSamples(packed: Uint8Array, widthPx: number, heightPx: number, bits: number, littleEndian: boolean): Uint16Array {
+export function unpackSamples(
+  packed: Uint8Array,
+  widthPx: number,
+  heightPx: number,
+  bits: number,
+  littleEndian: boolean,
+): Uint16Array {
   const data = new Uint16Array(widthPx * heightPx);
   if (bits === 16) {
     const low = littleEndian ? 0 : 1;

@@ -44,7 +44,14 @@ export function furthestPx(widthPx: number, heightPx: number, centreX: number, c
  * @param largestPx pixels beyond this radius are left out
  * @param test leaves out single pixels that do not fit what is expected at their radius
  */
-export function gatherCells(frame: CalibratedFrame, centreX: number, centreY: number, ringWidthPx: number, largestPx: number, test: PixelTest | null): Cells {
+export function gatherCells(
+  frame: CalibratedFrame,
+  centreX: number,
+  centreY: number,
+  ringWidthPx: number,
+  largestPx: number,
+  test: PixelTest | null,
+): Cells {
   const { widthPx, heightPx, counts, mask } = frame;
   const rings = Math.ceil(Math.min(largestPx, furthestPx(widthPx, heightPx, centreX, centreY)) / ringWidthPx) + 1;
   const total = rings * SECTORS;

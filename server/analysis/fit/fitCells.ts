@@ -5,7 +5,20 @@ import type { Cells } from './cells';
 import { fresnelU, type PinholeOptics } from './PinholeOptics';
 
 /** Parameters of the two-dimensional fit, in this order. */
-export const PARAMETERS = ['logSize', 'x', 'y', 'amplitude', 'background', 'slopeX', 'slopeY', 'illumination', 'ovalCos', 'ovalSin', 'tiltX', 'tiltY'] as const;
+export const PARAMETERS = [
+  'logSize',
+  'x',
+  'y',
+  'amplitude',
+  'background',
+  'slopeX',
+  'slopeY',
+  'illumination',
+  'ovalCos',
+  'ovalSin',
+  'tiltX',
+  'tiltY',
+] as const;
 export type ParameterName = (typeof PARAMETERS)[number];
 
 /**
@@ -48,7 +61,12 @@ export function radiusOf(values: PinholeParameters): number {
  * sin θ = ρ / √(ρ² + Z²) exactly, with ρ across and Z along the axis for a tilted sensor; an oval hole of semi-axes
  * a·√(c ± e) has v² = k² a² (xᵀ M x) / (ρ² + Z²) with det M = 1, so that the size is the geometric mean of the axes.
  */
-export function cellModel(cells: Cells, optics: PinholeOptics, values: PinholeParameters, withJacobian: boolean): CellModel {
+export function cellModel(
+  cells: Cells,
+  optics: PinholeOptics,
+  values: PinholeParameters,
+  withJacobian: boolean,
+): CellModel {
   const { length } = cells;
   const radius = radiusOf(values);
   const { pitchMm, distanceMm, waveNumber } = optics;
@@ -60,7 +78,10 @@ export function cellModel(cells: Cells, optics: PinholeOptics, values: PinholePa
   const reach = Math.sqrt(furthest) * pitchMm + Math.hypot(shiftX, shiftY);
   const oval = Math.hypot(values.ovalCos, values.ovalSin);
   const largestV = Math.min(LARGEST_V, 1.05 * (1 + oval) * scale * (reach / Math.hypot(reach, distanceMm)) + 0.5);
-  const table = pinholeTable({ u: fresnelU(optics, radius), illumination: values.illumination, pixelV: (scale * pitchMm) / distanceMm }, largestV);
+  const table = pinholeTable(
+    { u: fresnelU(optics, radius), illumination: values.illumination, pixelV: (scale * pitchMm) / distanceMm },
+    largestV,
+  );
   const lastRow = table.length / COLUMNS - 2;
   const mean = Math.sqrt(1 + oval * oval);
   const [sinX, sinY] = [Math.sin(values.tiltX), Math.sin(values.tiltY)];
@@ -129,7 +150,13 @@ function cellVariance(noise: NoiseModel, level: number, pixels: number): number 
  * equations are those of maximum likelihood (quasi-likelihood) and not those of data-weighted least squares, which are
  * biased low (Neyman's; see Fowler, arXiv 1312.5622, looked up).
  */
-export function fitCells(cells: Cells, optics: PinholeOptics, noise: NoiseModel, start: PinholeParameters, free: ParameterName[]): CellFit {
+export function fitCells(
+  cells: Cells,
+  optics: PinholeOptics,
+  noise: NoiseModel,
+  start: PinholeParameters,
+  free: ParameterName[],
+): CellFit {
   const columns = free.map((name) => PARAMETERS.indexOf(name));
   const p = columns.length;
   let values = { ...start };
@@ -225,7 +252,8 @@ function scaledCholesky(normal: Matrix, damping: number) {
   const scale = Array.from({ length: p }, (_, i) => 1 / Math.sqrt(normal.get(i, i)));
   if (!scale.every(Number.isFinite)) return null;
   const scaled = new Matrix(p, p);
-  for (let i = 0; i < p; i++) for (let j = 0; j < p; j++) scaled.set(i, j, normal.get(i, j) * (scale[i] * scale[j]) + (i === j ? damping : 0));
+  for (let i = 0; i < p; i++)
+    for (let j = 0; j < p; j++) scaled.set(i, j, normal.get(i, j) * (scale[i] * scale[j]) + (i === j ? damping : 0));
   const cholesky = new CholeskyDecomposition(scaled);
   return cholesky.isPositiveDefinite() ? { cholesky, scale } : null;
 }
@@ -242,6 +270,7 @@ export function invertScaled(normal: Matrix): Matrix | null {
   const made = scaledCholesky(normal, 0);
   if (made === null) return null;
   const inverse = made.cholesky.solve(Matrix.eye(normal.rows));
-  for (let i = 0; i < normal.rows; i++) for (let j = 0; j < normal.rows; j++) inverse.set(i, j, inverse.get(i, j) * (made.scale[i] * made.scale[j]));
+  for (let i = 0; i < normal.rows; i++)
+    for (let j = 0; j < normal.rows; j++) inverse.set(i, j, inverse.get(i, j) * (made.scale[i] * made.scale[j]));
   return inverse;
 }

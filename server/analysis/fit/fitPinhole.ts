@@ -3,7 +3,15 @@ import type { FoundCentre } from '../centre/findCentre';
 import { LARGEST_V } from '../models/pinholeTable';
 import { radialProfile } from '../profile/radialProfile';
 import { furthestPx, gatherCells, type Cells, type PixelTest } from './cells';
-import { cellModel, fitCells, radiusOf, type CellFit, type CellModel, type ParameterName, type PinholeParameters } from './fitCells';
+import {
+  cellModel,
+  fitCells,
+  radiusOf,
+  type CellFit,
+  type CellModel,
+  type ParameterName,
+  type PinholeParameters,
+} from './fitCells';
 import type { PinholeOptics } from './PinholeOptics';
 import { pixelTest } from './pixelTest';
 import { robustCovariance, type Spread } from './robustCovariance';
@@ -76,7 +84,8 @@ export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre
     tiltX: 0,
     tiltY: 0,
   };
-  const gather = (test: PixelTest | null) => gatherCells(frame, values.x, values.y, ringWidth(optics, values), modelledPx(optics, values), test);
+  const gather = (test: PixelTest | null) =>
+    gatherCells(frame, values.x, values.y, ringWidth(optics, values), modelledPx(optics, values), test);
 
   let cells = gather(null);
   values = fitCells(cells, optics, noise, values, FIRST).values;
@@ -96,7 +105,9 @@ export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre
   const ovalGain = (roundChiSquare - oval.cellChiSquare) / perCell;
   const tiltGain = (roundChiSquare - tilted.cellChiSquare) / perCell;
   const isOval = ovalGain > 30 && Math.hypot(oval.values.ovalCos, oval.values.ovalSin) > LEAST_OVAL;
-  const isTilted = tiltGain > 30 && (Math.hypot(tilted.values.tiltX, tilted.values.tiltY) * reach) / optics.distanceMm > LEAST_KEYSTONE;
+  const isTilted =
+    tiltGain > 30 &&
+    (Math.hypot(tilted.values.tiltX, tilted.values.tiltY) * reach) / optics.distanceMm > LEAST_KEYSTONE;
   if (isOval && (!isTilted || ovalGain >= tiltGain)) {
     fit = oval;
     shape = 'oval';

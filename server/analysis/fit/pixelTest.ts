@@ -23,7 +23,10 @@ export function pixelTest(cells: Cells, model: Float64Array, noise: NoiseModel, 
     n[ring]++;
     level[ring] += model[c];
     most[ring] = Math.max(most[ring], model[c]);
-    off[ring] = Math.max(off[ring], Math.abs(cells.mean[c] - model[c]) - 4 * Math.sqrt(varianceAt(noise, model[c]) / cells.pixels[c]));
+    off[ring] = Math.max(
+      off[ring],
+      Math.abs(cells.mean[c] - model[c]) - 4 * Math.sqrt(varianceAt(noise, model[c]) / cells.pixels[c]),
+    );
   }
   const steps = Math.ceil((rings * cells.ringWidthPx) / STEP_PX) + 2;
   const lowest = new Float64Array(steps).fill(-Infinity);
@@ -35,7 +38,11 @@ export function pixelTest(cells: Cells, model: Float64Array, noise: NoiseModel, 
     // The model's change across the ring.
     const before = ring > 0 && n[ring - 1] > 0 ? level[ring - 1] / n[ring - 1] : mean;
     const after = ring + 1 < rings && n[ring + 1] > 0 ? level[ring + 1] / n[ring + 1] : mean;
-    const room = LIMIT * Math.sqrt(varianceAt(noise, mean)) + Math.max(0, off[ring]) + Math.max(Math.abs(before - mean), Math.abs(after - mean)) + 1;
+    const room =
+      LIMIT * Math.sqrt(varianceAt(noise, mean)) +
+      Math.max(0, off[ring]) +
+      Math.max(Math.abs(before - mean), Math.abs(after - mean)) +
+      1;
     lowest[s] = mean - room;
     highest[s] = mean + room;
     if (most[ring] + CLIP_GUARD * Math.sqrt(varianceAt(noise, most[ring])) > clipCounts) {

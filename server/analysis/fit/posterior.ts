@@ -42,10 +42,12 @@ export function joinPrior(found: PinholeFit, optics: PinholeOptics, hasFlats: bo
   const { free, values } = fit;
   const g = free.indexOf('illumination');
   const typical = hasFlats ? 0 : TYPICAL_PATCHES;
-  const total = (i: number, j: number) => combined(spread.observed, spread.white, spread.response, i, j) + typical ** 2 * spread.patches.get(i, j);
+  const total = (i: number, j: number) =>
+    combined(spread.observed, spread.white, spread.response, i, j) + typical ** 2 * spread.patches.get(i, j);
   const radius = radiusOf(values);
   const expected = optics.beamRadiusMm === null ? 0 : (radius / optics.beamRadiusMm) ** 2;
-  const priorDeviation = optics.beamRadiusMm === null ? EVEN_DEVIATION : Math.max(EVEN_DEVIATION, BEAM_DEVIATION * expected);
+  const priorDeviation =
+    optics.beamRadiusMm === null ? EVEN_DEVIATION : Math.max(EVEN_DEVIATION, BEAM_DEVIATION * expected);
   const variance = total(g, g);
   const off = values.illumination - expected;
   const unevenLight = Math.abs(off) > DISAGREEMENT * Math.sqrt(variance + priorDeviation ** 2);

@@ -23,7 +23,14 @@ export interface Spread {
  * covariance for any noise is H⁻¹ B H⁻¹, B = Σ over blocks of s sᵀ, s = Σ w (mean − model) d (Huber's sandwich,
  * clustered; from memory). Of several block sizes the one with the largest variance of the size counts.
  */
-export function robustCovariance(cells: Cells, fit: CellFit, evaluated: CellModel, noise: NoiseModel, widthPx: number, heightPx: number): Spread {
+export function robustCovariance(
+  cells: Cells,
+  fit: CellFit,
+  evaluated: CellModel,
+  noise: NoiseModel,
+  widthPx: number,
+  heightPx: number,
+): Spread {
   const columns = fit.free.map((name) => PARAMETERS.indexOf(name));
   const p = columns.length;
   const longest = Math.max(widthPx, heightPx);
@@ -62,7 +69,8 @@ export function robustCovariance(cells: Cells, fit: CellFit, evaluated: CellMode
   const around = (middle: Matrix) => fit.covariance.mmul(middle).mmul(fit.covariance);
   const summed = (scores: Map<number, Float64Array>) => {
     const middle = Matrix.zeros(p, p);
-    for (const s of scores.values()) for (let i = 0; i < p; i++) for (let j = 0; j < p; j++) middle.set(i, j, middle.get(i, j) + s[i] * s[j]);
+    for (const s of scores.values())
+      for (let i = 0; i < p; i++) for (let j = 0; j < p; j++) middle.set(i, j, middle.get(i, j) + s[i] * s[j]);
     return middle;
   };
   let observed: Matrix | null = null;
@@ -75,5 +83,11 @@ export function robustCovariance(cells: Cells, fit: CellFit, evaluated: CellMode
       blocks = scores.size;
     }
   }
-  return { white: around(white), response: around(response), observed: observed ?? fit.covariance.clone(), patches: around(summed(patches.scores)), blocks };
+  return {
+    white: around(white),
+    response: around(response),
+    observed: observed ?? fit.covariance.clone(),
+    patches: around(summed(patches.scores)),
+    blocks,
+  };
 }

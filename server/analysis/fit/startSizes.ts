@@ -34,7 +34,12 @@ interface Points {
  * rings two pixels wide are tried with amplitude and background solved for; the deepest valleys are followed by
  * Levenberg–Marquardt. No nominal size enters.
  */
-export function startSizes(bins: RadialBins, optics: PinholeOptics, noise: NoiseModel, furthestPx: number): StartSize[] {
+export function startSizes(
+  bins: RadialBins,
+  optics: PinholeOptics,
+  noise: NoiseModel,
+  furthestPx: number,
+): StartSize[] {
   const points = choosePoints(bins, optics, noise);
   if (points.mean.length < 12) return [];
   const lambdaZ = ((2 * Math.PI) / optics.waveNumber) * optics.distanceMm;
@@ -49,8 +54,13 @@ export function startSizes(bins: RadialBins, optics: PinholeOptics, noise: Noise
     const illumination = illuminationOf(optics, size / 2);
     const pixelV = (optics.waveNumber * size * optics.pitchMm) / 2 / optics.distanceMm;
     let table: Float64Array;
-    if (u < AIRY_U && illumination < 0.02) table = airy ??= pinholeTable({ u: 0, illumination: 0, pixelV: 0 }, LARGEST_V);
-    else table = pinholeTable({ u, illumination, pixelV: Math.min(pixelV, 2) }, Math.min(LARGEST_V, (optics.waveNumber * size * reach) / 2 / optics.distanceMm + 1));
+    if (u < AIRY_U && illumination < 0.02)
+      table = airy ??= pinholeTable({ u: 0, illumination: 0, pixelV: 0 }, LARGEST_V);
+    else
+      table = pinholeTable(
+        { u, illumination, pixelV: Math.min(pixelV, 2) },
+        Math.min(LARGEST_V, (optics.waveNumber * size * reach) / 2 / optics.distanceMm + 1),
+      );
     sizes.push(size);
     costs.push(linearFit(points, optics, size, table).cost);
   }
@@ -72,7 +82,11 @@ export function illuminationOf(optics: PinholeOptics, radiusMm: number): number 
 function choosePoints(bins: RadialBins, optics: PinholeOptics, noise: NoiseModel): Points {
   const stride = Math.max(1, Math.ceil(bins.radiusPx.length / MOST_BINS));
   const count = Math.floor(bins.radiusPx.length / stride);
-  const points: Points = { radiusMm: new Float64Array(count), mean: new Float64Array(count), sigma: new Float64Array(count) };
+  const points: Points = {
+    radiusMm: new Float64Array(count),
+    mean: new Float64Array(count),
+    sigma: new Float64Array(count),
+  };
   for (let k = 0; k < count; k++) {
     let n = 0;
     let sum = 0;
@@ -96,7 +110,13 @@ function pattern(points: Points, optics: PinholeOptics, size: number, table: Flo
   const place = v / TABLE_STEP;
   const row = Math.min(place | 0, table.length / COLUMNS - 2);
   const from = row * COLUMNS;
-  return hermite(table[from], table[from + 1], table[from + COLUMNS], table[from + COLUMNS + 1], Math.min(1, place - row));
+  return hermite(
+    table[from],
+    table[from + 1],
+    table[from + COLUMNS],
+    table[from + COLUMNS + 1],
+    Math.min(1, place - row),
+  );
 }
 
 /** Best amplitude and background for a size; an amplitude below zero does not count. */
@@ -129,7 +149,11 @@ function linearFit(points: Points, optics: PinholeOptics, size: number, table: F
 function follow(points: Points, optics: PinholeOptics, size: number): StartSize | null {
   const tableOf = (s: number) =>
     pinholeTable(
-      { u: fresnelU(optics, s / 2), illumination: illuminationOf(optics, s / 2), pixelV: Math.min(2, (optics.waveNumber * s * optics.pitchMm) / 2 / optics.distanceMm) },
+      {
+        u: fresnelU(optics, s / 2),
+        illumination: illuminationOf(optics, s / 2),
+        pixelV: Math.min(2, (optics.waveNumber * s * optics.pitchMm) / 2 / optics.distanceMm),
+      },
       Math.min(LARGEST_V, (optics.waveNumber * s * Math.max(...points.radiusMm)) / 2 / optics.distanceMm + 1),
     );
   const linear = linearFit(points, optics, size, tableOf(size));
@@ -137,7 +161,13 @@ function follow(points: Points, optics: PinholeOptics, size: number): StartSize 
   const fit = leastSquares(
     {
       parameters: [
-        { name: 'logSize', unit: '1', initialValue: Math.log(size), minValue: Math.log(size) - 0.2, maxValue: Math.log(size) + 0.2 },
+        {
+          name: 'logSize',
+          unit: '1',
+          initialValue: Math.log(size),
+          minValue: Math.log(size) - 0.2,
+          maxValue: Math.log(size) + 0.2,
+        },
         { name: 'amplitude', unit: 'count', initialValue: linear.amplitude },
         { name: 'background', unit: 'count', initialValue: linear.background },
       ],
@@ -150,7 +180,8 @@ function follow(points: Points, optics: PinholeOptics, size: number): StartSize 
           const value = pattern(points, optics, s, table, i);
           model[i] = values[1] * value + values[2];
           if (jacobian === null) continue;
-          const v = (optics.waveNumber * s * points.radiusMm[i]) / 2 / Math.hypot(points.radiusMm[i], optics.distanceMm);
+          const v =
+            (optics.waveNumber * s * points.radiusMm[i]) / 2 / Math.hypot(points.radiusMm[i], optics.distanceMm);
           const row = Math.min(table.length / COLUMNS - 1, Math.round(v / TABLE_STEP));
           jacobian[3 * i] = values[1] * table[row * COLUMNS + 3];
           jacobian[3 * i + 1] = value;

@@ -42,17 +42,23 @@ export interface PinholeJudgement {
 }
 
 /** Decides whether a fitted frame is a pinhole's pattern at all. */
-export function judgePinhole(frame: CalibratedFrame, optics: PinholeOptics, centres: FoundCentre[], found: PinholeFit | null): { refusal: Refusal } | { judgement: PinholeJudgement } {
+export function judgePinhole(
+  frame: CalibratedFrame,
+  optics: PinholeOptics,
+  centres: FoundCentre[],
+  found: PinholeFit | null,
+): { refusal: Refusal } | { judgement: PinholeJudgement } {
   const straight = () => straightness(reducePlane(frame)) > STRAIGHT;
   const refuse = (reason: Refusal['reason'], message: string) => ({ refusal: { reason, message } });
   if (frame.clippedFraction > 0.7) {
-    return refuse('clipped', `${Math.round(100 * frame.clippedFraction)} % of the frame is clipped, too much to see rings. Shorten the exposure or attenuate the laser.`);
+    return refuse(
+      'clipped',
+      `${Math.round(100 * frame.clippedFraction)} % of the frame is clipped, too much to see rings. Shorten the exposure or attenuate the laser.`,
+    );
   }
   if (centres.length === 0) return refuse('no-pattern', NOTHING_WORDS);
   if (found === null) {
-    return straight()
-      ? refuse('wrong-pattern', STRAIGHT_WORDS)
-      : refuse('no-pattern', NOTHING_WORDS);
+    return straight() ? refuse('wrong-pattern', STRAIGHT_WORDS) : refuse('no-pattern', NOTHING_WORDS);
   }
   const { fit, cells, evaluated, fringePx } = found;
   const perCell = Math.max(1, fit.cellChiSquare / fit.cellCount);
@@ -96,24 +102,37 @@ export function judgePinhole(frame: CalibratedFrame, optics: PinholeOptics, cent
       );
     }
     if (straight()) return refuse('wrong-pattern', STRAIGHT_WORDS);
-    if (centres[0].score < 0.7) return refuse('no-pattern', `${NOTHING_WORDS} What is there is light without rings, such as speckle.`);
+    if (centres[0].score < 0.7)
+      return refuse('no-pattern', `${NOTHING_WORDS} What is there is light without rings, such as speckle.`);
     return refuse(
       'wrong-pattern',
       'There is a round or symmetric spot, but its light does not fall off in the rings of a round hole. It may be the bare beam, or a hole of another shape. Check which aperture stands in the beam.',
     );
   }
   if (second !== null && second.explained > 0.5 && second.relative > STRONG_SECOND) {
-    return refuse('two-patterns', `A second pattern of about ${Math.round(100 * second.relative)} % of the first lies in the frame. Remove the reflection or block the second hole.`);
+    return refuse(
+      'two-patterns',
+      `A second pattern of about ${Math.round(100 * second.relative)} % of the first lies in the frame. Remove the reflection or block the second hole.`,
+    );
   }
   if (fringePx < LEAST_FRINGE_PX) {
-    return refuse('under-sampled', `Neighbouring rings lie ${fringePx.toFixed(1)} pixels apart, too close for the sensor to tell them. Move the camera further away or use smaller pixels.`);
+    return refuse(
+      'under-sampled',
+      `Neighbouring rings lie ${fringePx.toFixed(1)} pixels apart, too close for the sensor to tell them. Move the camera further away or use smaller pixels.`,
+    );
   }
   if (largestV < FIRST_DARK + 0.4) {
-    return refuse('too-few-rings', 'Not even the first dark ring lies whole on the sensor, so the size cannot be told from the brightness. Move the camera nearer or use a larger sensor.');
+    return refuse(
+      'too-few-rings',
+      'Not even the first dark ring lies whole on the sensor, so the size cannot be told from the brightness. Move the camera nearer or use a larger sensor.',
+    );
   }
   const relative = Math.sqrt(fit.covariance.get(0, 0));
   if (!(relative < MOST_UNCERTAIN)) {
-    return refuse('low-signal', `The pattern stands so little out of the noise that its size would be uncertain by ${(100 * relative).toFixed(0)} %. Lengthen the exposure, or average more frames.`);
+    return refuse(
+      'low-signal',
+      `The pattern stands so little out of the noise that its size would be uncertain by ${(100 * relative).toFixed(0)} %. Lengthen the exposure, or average more frames.`,
+    );
   }
   return { judgement: { second, unexplained, largestV } };
 }

@@ -128,7 +128,13 @@ export function pinholeTable(state: PinholeState, largestV: number): Float64Arra
   return table;
 }
 
-function blend(base: Float64Array, once: Float64Array, twice: Float64Array | null, second: number, fourth: number): Float64Array {
+function blend(
+  base: Float64Array,
+  once: Float64Array,
+  twice: Float64Array | null,
+  second: number,
+  fourth: number,
+): Float64Array {
   return base.map((value, i) => value + second * once[i] + (twice === null ? 0 : fourth * twice[i]));
 }
 

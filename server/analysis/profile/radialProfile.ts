@@ -60,7 +60,9 @@ export function radialProfile(frame: CalibratedFrame, centreX: number, centreY: 
   return {
     radiusPx: Float64Array.from(kept, (b) => radii[b] / n[b]),
     meanCounts: Float64Array.from(kept, (b) => sum[b] / n[b]),
-    scatterCounts: Float64Array.from(kept, (b) => Math.sqrt(Math.max(0, squares[b] / n[b] - (sum[b] / n[b]) ** 2) * (n[b] / (n[b] - 1)))),
+    scatterCounts: Float64Array.from(kept, (b) =>
+      Math.sqrt(Math.max(0, squares[b] / n[b] - (sum[b] / n[b]) ** 2) * (n[b] / (n[b] - 1))),
+    ),
     pixelCount: Float64Array.from(kept, (b) => n[b]),
   };
 }

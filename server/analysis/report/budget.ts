@@ -26,10 +26,25 @@ const MODEL_RENDERED = 1.2e-3;
  * freedom by Welch–Satterthwaite (G.2b), U = k u with k from Student's distribution.
  * D = v λ √(r² + z²) / (π r): relative uncertainties of wavelength, distance and pitch carry over one to one.
  */
-export function budget(sizeUm: number, spread: SizeSpread, measureCase: MeasureCase, distanceMm: number, rendered: boolean, tiltFitted: boolean): Budget {
+export function budget(
+  sizeUm: number,
+  spread: SizeSpread,
+  measureCase: MeasureCase,
+  distanceMm: number,
+  rendered: boolean,
+  tiltFitted: boolean,
+): Budget {
   const { uncertainty, camera } = measureCase;
   const lines: BudgetLine[] = [
-    { source: 'fit', contributionUm: spread.fit * sizeUm, standardUncertainty: null, unit: null, sensitivity: null, degreesOfFreedom: null, evaluation: 'A' },
+    {
+      source: 'fit',
+      contributionUm: spread.fit * sizeUm,
+      standardUncertainty: null,
+      unit: null,
+      sensitivity: null,
+      degreesOfFreedom: null,
+      evaluation: 'A',
+    },
     {
       source: 'pixel-response',
       contributionUm: spread.response * sizeUm,
@@ -51,32 +66,68 @@ export function budget(sizeUm: number, spread: SizeSpread, measureCase: MeasureC
   ];
   const input = (source: BudgetLine['source'], u: number | undefined, unit: string, sensitivity: number) => {
     if (u === undefined || u === 0) return;
-    lines.push({ source, contributionUm: Math.abs(sensitivity) * u, standardUncertainty: u, unit, sensitivity, degreesOfFreedom: null, evaluation: 'B' });
+    lines.push({
+      source,
+      contributionUm: Math.abs(sensitivity) * u,
+      standardUncertainty: u,
+      unit,
+      sensitivity,
+      degreesOfFreedom: null,
+      evaluation: 'B',
+    });
   };
   input('wavelength', uncertainty?.wavelengthNm, 'nm', sizeUm / measureCase.wavelengthNm);
   input('distance', uncertainty?.distanceMm, 'mm', sizeUm / distanceMm);
   input('pixel-pitch', uncertainty?.pixelPitchUm, 'µm', -sizeUm / (measureCase.pixelPitchUm ?? 1));
   const { coverGlassMm = 0, coverGlassIndex } = camera;
   if (coverGlassMm > 0 && coverGlassIndex !== undefined) {
-    const path = Math.hypot(GLASS_THICKNESS * coverGlassMm * (1 - 1 / coverGlassIndex), (GLASS_INDEX * coverGlassMm) / coverGlassIndex ** 2);
+    const path = Math.hypot(
+      GLASS_THICKNESS * coverGlassMm * (1 - 1 / coverGlassIndex),
+      (GLASS_INDEX * coverGlassMm) / coverGlassIndex ** 2,
+    );
     input('cover-glass', path, 'mm', -sizeUm / distanceMm);
   }
   // A tilt τ shortens the rings by τ²/4 on average over the turn.
   const tilt = (TILT_DEG * Math.PI) / 180;
   if (!tiltFitted) {
-    lines.push({ source: 'tilt', contributionUm: (sizeUm * tilt ** 2) / 4, standardUncertainty: TILT_DEG, unit: '°', sensitivity: null, degreesOfFreedom: null, evaluation: 'B' });
+    lines.push({
+      source: 'tilt',
+      contributionUm: (sizeUm * tilt ** 2) / 4,
+      standardUncertainty: TILT_DEG,
+      unit: '°',
+      sensitivity: null,
+      degreesOfFreedom: null,
+      evaluation: 'B',
+    });
   }
-  lines.push({ source: 'model', contributionUm: sizeUm * (rendered ? MODEL_RENDERED : MODEL), standardUncertainty: null, unit: null, sensitivity: null, degreesOfFreedom: null, evaluation: 'B' });
+  lines.push({
+    source: 'model',
+    contributionUm: sizeUm * (rendered ? MODEL_RENDERED : MODEL),
+    standardUncertainty: null,
+    unit: null,
+    sensitivity: null,
+    degreesOfFreedom: null,
+    evaluation: 'B',
+  });
   return combine(lines);
 }
 
 /** Adds the lines up. */
 export function combine(lines: BudgetLine[]): Budget {
   const variance = lines.reduce((sum, line) => sum + line.contributionUm ** 2, 0);
-  const fourth = lines.reduce((sum, line) => sum + (line.degreesOfFreedom === null ? 0 : line.contributionUm ** 4 / line.degreesOfFreedom), 0);
+  const fourth = lines.reduce(
+    (sum, line) => sum + (line.degreesOfFreedom === null ? 0 : line.contributionUm ** 4 / line.degreesOfFreedom),
+    0,
+  );
   const effective = fourth > 0 ? variance ** 2 / fourth : Infinity;
   const degrees = effective > 1e6 ? null : Math.max(1, Math.floor(effective));
   const k = coverageFactor(degrees);
   const standard = Math.sqrt(variance);
-  return { lines, standardUncertaintyUm: standard, effectiveDegreesOfFreedom: degrees, coverageFactor: k, expandedUncertaintyUm: k * standard };
+  return {
+    lines,
+    standardUncertaintyUm: standard,
+    effectiveDegreesOfFreedom: degrees,
+    coverageFactor: k,
+    expandedUncertaintyUm: k * standard,
+  };
 }

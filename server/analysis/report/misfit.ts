@@ -20,7 +20,12 @@ export interface Misfit {
 }
 
 /** Frame minus model in units of the expected noise, for every pixel. */
-export function misfit(frame: CalibratedFrame, optics: PinholeOptics, values: PinholeParameters, parameters: number): Misfit {
+export function misfit(
+  frame: CalibratedFrame,
+  optics: PinholeOptics,
+  values: PinholeParameters,
+  parameters: number,
+): Misfit {
   const { widthPx, heightPx, counts, mask, noise } = frame;
   const bytes = new Uint8Array(widthPx * heightPx);
   let sum = 0;
@@ -36,7 +41,19 @@ export function misfit(frame: CalibratedFrame, optics: PinholeOptics, values: Pi
       xs[i] = (i % widthPx) - values.x;
       ys[i] = top + Math.floor(i / widthPx) - values.y;
     }
-    const band = { centreX: values.x, centreY: values.y, ringWidthPx: 1, length, x: xs, y: ys, radiusVariance: none, pixels: none, mean: none, scatter: none, ring: new Int32Array(0) };
+    const band = {
+      centreX: values.x,
+      centreY: values.y,
+      ringWidthPx: 1,
+      length,
+      x: xs,
+      y: ys,
+      radiusVariance: none,
+      pixels: none,
+      mean: none,
+      scatter: none,
+      ring: new Int32Array(0),
+    };
     const { model } = cellModel(band, optics, values, false);
     for (let i = 0; i < length; i++) {
       const at = top * widthPx + i;

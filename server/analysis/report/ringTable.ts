@@ -37,7 +37,12 @@ function modelExtrema(table: Float64Array): Extremum[] {
     const kind = a < 0 ? 'dark' : 'bright';
     // Dark rings by the nearest zero of J1; a bright ring follows the dark ring of its order.
     const beneath = DARK_ZEROS.filter((z) => z < v).length;
-    const order = kind === 'bright' ? beneath : beneath > 0 && (beneath >= DARK_ZEROS.length || v - DARK_ZEROS[beneath - 1] < DARK_ZEROS[beneath] - v) ? beneath : beneath + 1;
+    const order =
+      kind === 'bright'
+        ? beneath
+        : beneath > 0 && (beneath >= DARK_ZEROS.length || v - DARK_ZEROS[beneath - 1] < DARK_ZEROS[beneath] - v)
+          ? beneath
+          : beneath + 1;
     if (order >= 1) found.push({ v, kind, order });
   }
   return found;
@@ -48,13 +53,25 @@ function modelExtrema(table: Float64Array): Extremum[] {
  * fitted amplitude nor background nor size enters the radius, but for the small lean of a quartic's extremum, which is
  * taken from the same quartic on the model's profile. Rings that do not stand out of the noise are left out.
  */
-export function ringTable(profile: FittedProfile, values: PinholeParameters, optics: PinholeOptics, noise: NoiseModel): Ring[] {
+export function ringTable(
+  profile: FittedProfile,
+  values: PinholeParameters,
+  optics: PinholeOptics,
+  noise: NoiseModel,
+): Ring[] {
   const radius = radiusOf(values);
   const sizeUm = 2000 * radius;
   const { pitchMm, distanceMm, waveNumber } = optics;
   const outermost = profile.radiusPx[profile.radiusPx.length - 1] * pitchMm;
   const largestV = Math.min(LARGEST_V, reducedRadius(optics, radius, outermost));
-  const table = pinholeTable({ u: fresnelU(optics, radius), illumination: values.illumination, pixelV: (waveNumber * radius * pitchMm) / distanceMm }, largestV);
+  const table = pinholeTable(
+    {
+      u: fresnelU(optics, radius),
+      illumination: values.illumination,
+      pixelV: (waveNumber * radius * pitchMm) / distanceMm,
+    },
+    largestV,
+  );
   const fringeMm = (Math.PI * distanceMm) / (waveNumber * radius);
   const rings: Ring[] = [];
   for (const { v, kind, order } of modelExtrema(table)) {
@@ -96,7 +113,13 @@ function bins(profile: FittedProfile, atPx: number, halfPx: number): { from: num
   return span > 1.6 * halfPx ? { from, to } : null;
 }
 
-function quarticExtremum(profile: FittedProfile, { from, to }: { from: number; to: number }, atPx: number, counts: Float64Array, noise: NoiseModel) {
+function quarticExtremum(
+  profile: FittedProfile,
+  { from, to }: { from: number; to: number },
+  atPx: number,
+  counts: Float64Array,
+  noise: NoiseModel,
+) {
   const count = to - from;
   const half = (profile.radiusPx[to - 1] - profile.radiusPx[from]) / 2;
   const design = new Matrix(count, DEGREE + 1);
@@ -133,16 +156,23 @@ function quarticExtremum(profile: FittedProfile, { from, to }: { from: number; t
   const byBend = Matrix.rowVector([0, 0, 2, 6 * x, 12 * x * x]);
   const widen = Math.max(1, reduced);
   const spread = (row: Matrix) => Math.sqrt(row.mmul(inverse).mmul(row.transpose()).get(0, 0) * widen);
-  return { place: atPx + x * half, deviation: (spread(bySlope) / Math.abs(bend)) * half, curvature: bend, curvatureDeviation: spread(byBend) };
+  return {
+    place: atPx + x * half,
+    deviation: (spread(bySlope) / Math.abs(bend)) * half,
+    curvature: bend,
+    curvatureDeviation: spread(byBend),
+  };
 }
 
 function invert(normal: Matrix): Matrix {
   const scale = Array.from({ length: normal.rows }, (_, i) => 1 / Math.sqrt(normal.get(i, i)));
   if (!scale.every(Number.isFinite)) throw new RangeError('The window holds too few places.');
   const scaled = new Matrix(normal.rows, normal.rows);
-  for (let i = 0; i < normal.rows; i++) for (let j = 0; j < normal.rows; j++) scaled.set(i, j, normal.get(i, j) * (scale[i] * scale[j]));
+  for (let i = 0; i < normal.rows; i++)
+    for (let j = 0; j < normal.rows; j++) scaled.set(i, j, normal.get(i, j) * (scale[i] * scale[j]));
   const inverse = inverseOf(scaled);
-  for (let i = 0; i < normal.rows; i++) for (let j = 0; j < normal.rows; j++) inverse.set(i, j, inverse.get(i, j) * (scale[i] * scale[j]));
+  for (let i = 0; i < normal.rows; i++)
+    for (let j = 0; j < normal.rows; j++) inverse.set(i, j, inverse.get(i, j) * (scale[i] * scale[j]));
   return inverse;
 }
 
@@ -158,6 +188,8 @@ export function sizeOfDarkRings(rings: Ring[]): { sizeUm: number; uncertaintyUm:
     sum += weight * ring.sizeUm;
   }
   const sizeUm = sum / weights;
-  const excess = dark.reduce((s, r) => s + ((r.radiusMm * (r.sizeUm - sizeUm)) / (r.sizeUm * r.uncertaintyMm)) ** 2, 0) / Math.max(1, dark.length - 1);
+  const excess =
+    dark.reduce((s, r) => s + ((r.radiusMm * (r.sizeUm - sizeUm)) / (r.sizeUm * r.uncertaintyMm)) ** 2, 0) /
+    Math.max(1, dark.length - 1);
   return { sizeUm, uncertaintyUm: Math.sqrt(Math.max(1, excess) / weights) };
 }

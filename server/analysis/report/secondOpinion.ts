@@ -29,7 +29,13 @@ const METHOD = 3e-4;
  * cut-off seen in the spectrum itself.
  * @param reason why it cannot be had, found out by the caller; null when it can
  */
-export function secondOpinion(frame: CalibratedFrame, optics: PinholeOptics, illumination: number, firstSizeMm: number, reason: string | null): SecondOpinion {
+export function secondOpinion(
+  frame: CalibratedFrame,
+  optics: PinholeOptics,
+  illumination: number,
+  firstSizeMm: number,
+  reason: string | null,
+): SecondOpinion {
   const none = (why: string): SecondOpinion => ({ sizeUm: null, standardUncertaintyUm: null, reason: why });
   if (reason !== null) return none(reason);
   const { x, y } = brightCentre(frame);
@@ -48,7 +54,9 @@ export function secondOpinion(frame: CalibratedFrame, optics: PinholeOptics, ill
   // Hankel transform of model × window on the radii of the window; frequencies in cycles a block.
   const radii = Float64Array.from({ length: RADII }, (_, i) => ((i + 0.5) / RADII) * windowBlocks);
   const weights = radii.map((r) => ((2 * Math.PI * windowBlocks) / RADII) * r * taper(r / windowBlocks));
-  const kernel = bins.map((bin) => radii.map((r, i) => weights[i] * besselj0((2 * Math.PI * spectrum.frequency[bin] * r))));
+  const kernel = bins.map((bin) =>
+    radii.map((r, i) => weights[i] * besselj0(2 * Math.PI * spectrum.frequency[bin] * r)),
+  );
   const offset = kernel.map((row) => row.reduce((s, k) => s + k, 0));
   const modelled = (sizeMm: number) => {
     const radius = sizeMm / 2;
@@ -57,7 +65,9 @@ export function secondOpinion(frame: CalibratedFrame, optics: PinholeOptics, ill
     const largest = Math.min(LARGEST_V, reducedRadius(optics, radius, window * optics.pitchMm) + 0.5);
     const table = pinholeTable({ u: fresnelU(optics, radius), illumination: illumination * scale, pixelV }, largest);
     const end = ((table.length / COLUMNS - 1) * 0.05) as number;
-    const intensity = radii.map((r) => intensityAt(table, Math.min(end, reducedRadius(optics, radius, r * block * optics.pitchMm))));
+    const intensity = radii.map((r) =>
+      intensityAt(table, Math.min(end, reducedRadius(optics, radius, r * block * optics.pitchMm))),
+    );
     return kernel.map((row) => row.reduce((s, k, i) => s + k * intensity[i], 0));
   };
   const y0 = bins.map((bin) => spectrum.modulus[bin]);
@@ -66,7 +76,13 @@ export function secondOpinion(frame: CalibratedFrame, optics: PinholeOptics, ill
   const fit = leastSquares(
     {
       parameters: [
-        { name: 'logSize', unit: '1', initialValue: Math.log(firstSizeMm), minValue: Math.log(firstSizeMm) - 0.3, maxValue: Math.log(firstSizeMm) + 0.3 },
+        {
+          name: 'logSize',
+          unit: '1',
+          initialValue: Math.log(firstSizeMm),
+          minValue: Math.log(firstSizeMm) - 0.3,
+          maxValue: Math.log(firstSizeMm) + 0.3,
+        },
         { name: 'amplitude', unit: 'count', initialValue: amplitude },
         { name: 'offset', unit: 'count', initialValue: 0 },
       ],
@@ -90,7 +106,8 @@ export function secondOpinion(frame: CalibratedFrame, optics: PinholeOptics, ill
     { maxIterations: 30 },
   );
   const [size] = fit.parameters;
-  if (fit.status === 'non-finite' || size.stdUncertainty === null || size.atBound) return none('The transform of the frame does not follow that of a round hole.');
+  if (fit.status === 'non-finite' || size.stdUncertainty === null || size.atBound)
+    return none('The transform of the frame does not follow that of a round hole.');
   const sizeUm = Math.exp(size.value) * 1000;
   return { sizeUm, standardUncertaintyUm: sizeUm * Math.hypot(size.stdUncertainty, METHOD), reason: null };
 }
@@ -123,7 +140,13 @@ function brightCentre({ counts, mask, widthPx, heightPx }: CalibratedFrame): { x
 }
 
 /** Modulus of the transform of the windowed frame, averaged over directions, with the mean frequency of each bin. */
-function windowedSpectrum({ counts, mask, widthPx, heightPx }: CalibratedFrame, cx: number, cy: number, window: number, block: number) {
+function windowedSpectrum(
+  { counts, mask, widthPx, heightPx }: CalibratedFrame,
+  cx: number,
+  cy: number,
+  window: number,
+  block: number,
+) {
   const data = new Float64Array(2 * SIZE * SIZE);
   const filled = new Float64Array(SIZE * SIZE);
   const left = Math.round(cx - (SIZE * block) / 2);
