@@ -13,7 +13,7 @@ import { axisText, decimalsOf, linearScale } from './scales';
 const ORDER_STEP_PX = 6;
 
 /** What `ResidualStrip` shows once the drawing engine is there. */
-export function ResidualDrawing({ points, xMax, limit, unit, chosenId, onChoose, heightPx = 134 }: ResidualStripProps) {
+export function ResidualDrawing({ points, xMax, limit, unit, chosenId, onChoose, heightPx = 116 }: ResidualStripProps) {
   const { colours } = useLook();
   const orders = useMemo(() => [...new Set(points.map((p) => p.order))].sort((a, b) => a - b), [points]);
   const notes = useMemo(() => pinnedNotes(points, limit, unit), [points, limit, unit]);
@@ -38,7 +38,6 @@ export function ResidualDrawing({ points, xMax, limit, unit, chosenId, onChoose,
         const text = (value > 0 ? '+' : '') + axisText(value, decimals);
         pen.text(text, box.left - 8, y(value) + 4, { color: colours.ink2, anchor: 'end' });
       }
-      pen.text(`Distance from the line, ${unit}`, 12, 16, { color: colours.ink2 });
       for (const p of points) {
         const px = x(p.x) + (orders.indexOf(p.order) - (orders.length - 1) / 2) * ORDER_STEP_PX;
         if (Math.abs(p.residual) > 2.2 * limit) {
@@ -84,5 +83,5 @@ export function ResidualDrawing({ points, xMax, limit, unit, chosenId, onChoose,
 
 function stripBox(width: number, height: number): Box {
   const above = comparePlot(width, height);
-  return { left: above.left, top: 26, width: above.width, height: height - 36 };
+  return { left: above.left, top: 6, width: above.width, height: height - 16 };
 }

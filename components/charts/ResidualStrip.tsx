@@ -25,5 +25,5 @@ const load = () => import('./ResidualDrawing').then((m) => m.ResidualDrawing);
 
 /** Distance of each point from its line, in a slot; what lies beyond is pinned and named. */
 export function ResidualStrip(props: ResidualStripProps) {
-  return <SkiaGate load={load} componentProps={props} heightPx={props.heightPx ?? 134} />;
+  return <SkiaGate load={load} componentProps={props} heightPx={props.heightPx ?? 116} />;
 }

@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { View } from 'react-native';
 import { Text } from '@/components/ui/Text';
 import { fontFamily, radius } from '@/components/ui/tokens';
@@ -30,10 +31,11 @@ const columns = [
 /** The ring table of the projection sheet: each row stands where its ring's plumb arrives. */
 export function DeskRingTable({ dark, measured, rowYs, headPx, chosenOrder, onChoose }: Props) {
   const { colours } = useLook();
+  const [width, setWidth] = useState(0);
   const ys = [...rowYs.values()].sort((a, b) => a - b);
   const gap = ys.length > 1 ? Math.min(...ys.slice(1).map((y, i) => y - ys[i]!)) : 56;
   const rowHeight = Math.max(20, Math.min(56, gap - 2));
-  const size = rowHeight >= 36 ? 20 : 15;
+  const size = rowHeight >= 36 && width >= 430 ? 20 : 15;
   // One number of decimals for a column, so that its points stand under each other.
   const radiusPlaces = Math.max(0, ...dark.map((r) => placesOfUncertainty(r.uncertaintyMm)));
   const sizePlaces = Math.max(0, ...dark.map((r) => placesOfUncertainty((r.sizeUm * r.uncertaintyMm) / r.radiusMm)));
@@ -42,7 +44,10 @@ export function DeskRingTable({ dark, measured, rowYs, headPx, chosenOrder, onCh
     alignItems: i === 0 ? ('flex-start' as const) : ('flex-end' as const),
   });
   return (
-    <View style={{ flex: 1, backgroundColor: colours.plate, borderRadius: radius.plate, overflow: 'hidden' }}>
+    <View
+      onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)}
+      style={{ flex: 1, backgroundColor: colours.plate, borderRadius: radius.plate, overflow: 'hidden' }}
+    >
       <View
         style={{ height: headPx - 2, flexDirection: 'row', alignItems: 'center', paddingLeft: 20, paddingRight: 16 }}
       >

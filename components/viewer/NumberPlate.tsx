@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { View } from 'react-native';
 import { Text } from '@/components/ui/Text';
 import { fontFamily, radius } from '@/components/ui/tokens';
@@ -14,16 +15,21 @@ interface Props {
 /** A number that stands alone: what it is above, its unit behind. */
 export function NumberPlate({ label, value, unit, flex = 1 }: Props) {
   const { colours, desk } = useLook();
-  // Long numbers shrink; they are never cut.
-  const size = Math.round((desk ? 28 : 21) * Math.min(1, 6.4 / value.length));
+  const [width, setWidth] = useState(0);
+  const inset = desk ? 16 : 12;
+  const largest = desk ? 28 : 21;
+  // Numbers shrink to their plate, with their unit; they are never cut. A figure is about 0.66 of its size wide.
+  const room = width - inset - 6 - (desk ? 34 : 28);
+  const size = width === 0 ? largest : Math.max(12, Math.min(largest, Math.floor(room / (value.length * 0.66))));
   return (
     <View
+      onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)}
       style={{
         flex,
         minWidth: 0,
         backgroundColor: colours.plate,
         borderRadius: radius.plate,
-        paddingLeft: desk ? 16 : 14,
+        paddingLeft: inset,
         paddingTop: desk ? 10 : 9,
         height: desk ? 84 : 66,
         overflow: 'hidden',

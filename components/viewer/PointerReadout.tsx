@@ -33,7 +33,8 @@ export function PointerReadout({ pointer, plane, misfit, measured }: Props) {
       ['Radius', formatQuantity(r?.radiusMm, 'mm', { places: 4 })],
     );
     entries.push(['Model', formatNumber(r?.modelCounts, { significant: 3 })]);
-    if (misfit) entries.push(['Misfit', r?.masked ? 'masked' : r?.misfit == null ? '–' : signed(r.misfit)]);
+    const own = r?.misfit ?? null;
+    if (misfit) entries.push(['Misfit', r?.masked ? 'masked' : own === null ? '–' : signed(own)]);
   }
   return <KeyValueList entries={entries} />;
 }

@@ -234,6 +234,7 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
           : noRows,
       colours,
       onFrame,
+      ground: theme === 'light' ? colours.plate : colours.gap,
       theme,
       negative,
       density: PixelRatio.get(),

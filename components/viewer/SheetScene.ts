@@ -54,6 +54,8 @@ export interface SheetScene {
   colours: Colours;
   /** Colours for what lies on the frame: those of the theme that its ground resembles. */
   onFrame: Colours;
+  /** What the charts stand on. */
+  ground: string;
   theme: ThemeName;
   negative: boolean;
   density: number;

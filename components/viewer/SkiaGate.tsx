@@ -18,7 +18,7 @@ interface Props<P> {
 
 /** Holds the place of a drawing until the drawing engine is there, so that nothing else has to carry it. */
 export function SkiaGate<P extends object>({ load, componentProps, heightPx }: Props<P>) {
-  const { colours } = useLook();
+  const { colours, theme } = useLook();
   const [, setArrived] = useState(0);
   const [state, setState] = useState<'loading' | 'slow' | 'failed'>('loading');
   const [attempt, setAttempt] = useState(0);
@@ -52,7 +52,12 @@ export function SkiaGate<P extends object>({ load, componentProps, heightPx }: P
   return (
     <View
       aria-busy={state !== 'failed'}
-      style={{ height: heightPx, flexGrow: heightPx === undefined ? 1 : 0, backgroundColor: colours.gap, padding: 16 }}
+      style={{
+        height: heightPx,
+        flexGrow: heightPx === undefined ? 1 : 0,
+        backgroundColor: theme === 'light' ? colours.plate : colours.gap,
+        padding: 16,
+      }}
     >
       {state === 'slow' && <Text variant="small">Waiting for the drawing engine, 3 MB the first time.</Text>}
       {state === 'failed' && (

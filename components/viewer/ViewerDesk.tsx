@@ -34,7 +34,7 @@ const noRows: ReadonlyMap<number, number> = new Map();
 /** The viewer as a projection sheet: rings become rows to the right and dips below. */
 export function ViewerDesk({ props, state }: { props: ViewerProps; state: ViewerState }) {
   const { capture, frame, position, plane, misfit, measured } = props;
-  const { colours } = useLook();
+  const { colours, widthPx } = useLook();
   useBenchLight(capture.wavelengthNm, capture.benchName);
   const [room, setRoom] = useState({ width: 0, height: 0 });
   const [place, setPlace] = useState<Place | null>(null);
@@ -74,7 +74,7 @@ export function ViewerDesk({ props, state }: { props: ViewerProps; state: Viewer
       {props.film}
       <Panel
         title={title}
-        note={frameNote(frame, measured ? (frame.measurement?.darkCount ?? null) : null)}
+        note={widthPx < 1340 ? undefined : frameNote(frame, measured ? (frame.measurement?.darkCount ?? null) : null)}
         back={props.back}
         level={1}
         scroll={false}
@@ -243,7 +243,7 @@ export function ViewerDesk({ props, state }: { props: ViewerProps; state: Viewer
                       levels={state.levels}
                       floorCounts={state.floorCounts}
                       onChange={state.setLevels}
-                      heightPx={84}
+                      heightPx={room.width < 1150 ? 56 : 84}
                     />
                     <View style={{ marginTop: 'auto' }}>
                       <ToneControl state={state} />

@@ -20,7 +20,8 @@ const MAX_DASHED_RADIUS_PX = 2500;
 /** Draws the whole sheet: frame, unwrapped view, plumbs, profile and misfit. */
 export function drawSheet(pen: Pen, scene: SheetScene): void {
   const { layout, colours, measured } = scene;
-  pen.rect({ left: 0, top: 0, width: layout.width, height: layout.height }, colours.gap);
+  pen.rect({ left: 0, top: 0, width: layout.width, height: layout.height }, scene.ground);
+  pen.rect(layout.frame, scene.onFrame.gap);
   const unwrapped = scene.view === 'unwrapped' && measured !== null;
   const pane: Box = unwrapped
     ? { ...layout.frame, left: layout.zeroX, width: right(layout.frame) - layout.zeroX }
@@ -157,7 +158,7 @@ function drawRadial(pen: Pen, scene: SheetScene, measured: MeasuredFrame, axis: 
   drawRingTags(pen, colours, tags, heads, scene.chosenOrder);
   pen.text(wide ? 'Dark ring' : 'Ring', wordsX, tags.top + tags.height / 2 + 4.5, { color: colours.ink2 });
   pen.text('Counts', wordsX, plot.top + 8, { color: colours.ink2 });
-  pen.text(wide ? 'Radius, mm' : 'mm', wordsX, bottom(plot) + 18, { color: colours.ink2 });
+  pen.text(wide && plot.left >= 100 ? 'Radius, mm' : 'mm', wordsX, bottom(plot) + 18, { color: colours.ink2 });
 }
 
 function drawAlong(pen: Pen, scene: SheetScene): void {
