@@ -59,7 +59,7 @@ export function ResidualDrawing({ points, xMax, limit, unit, chosenId, onChoose,
         pen.text(note.text, left + 5, top + 12, { color: colours.ink1 });
       }
     },
-    [colours, points, xMax, limit, unit, chosenId, orders, notes],
+    [colours, points, xMax, limit, chosenId, orders, notes],
   );
   const touch = useCallback(
     (px: number, _py: number, size: SurfaceSize) => {

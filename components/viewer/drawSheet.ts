@@ -19,7 +19,7 @@ const MAX_DASHED_RADIUS_PX = 2500;
 
 /** Draws the whole sheet: frame, unwrapped view, plumbs, profile and misfit. */
 export function drawSheet(pen: Pen, scene: SheetScene): void {
-  const { layout, colours, measured } = scene;
+  const { layout, measured } = scene;
   pen.rect({ left: 0, top: 0, width: layout.width, height: layout.height }, scene.ground);
   pen.rect(layout.frame, scene.onFrame.gap);
   const unwrapped = scene.view === 'unwrapped' && measured !== null;
