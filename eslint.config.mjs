@@ -16,7 +16,7 @@ const zones = [
     target: './components',
     from: ['./app', './server', './tests', './hooks/api', './hooks/queries', './hooks/upload', './hooks/events'],
   },
-  { target: './app', from: ['./server', './tests', './hooks/api'] },
+  { target: './app', from: ['./server', './tests', './hooks/api/call.ts'] },
 ].map((zone) => ({
   ...zone,
   message: 'The layers run app → components, hooks → shared ← server (see DEVELOPERS.md).',
@@ -88,7 +88,7 @@ export default tseslint.config(
       ],
     },
     rules: {
-      eqeqeq: ['error', 'always'],
+      eqeqeq: ['error', 'always', { null: 'ignore' }],
       'no-constant-condition': ['error', { checkLoops: false }],
       'no-debugger': 'error',
       'no-duplicate-case': 'error',
@@ -205,7 +205,7 @@ export default tseslint.config(
     },
   },
   {
-    files: ['tests/**/*.{ts,tsx}'],
+    files: ['tests/**/*.{ts,tsx}', '**/*.d.ts'],
     rules: { 'import-x/no-default-export': 'off' },
   },
   {
