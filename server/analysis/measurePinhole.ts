@@ -221,7 +221,8 @@ function flagsOf(frame: CalibratedFrame, found: PinholeFit, judgement: PinholeJu
   if (judgement.second !== null && judgement.second.explained > 0.5 && judgement.second.relative > 0.004)
     flags.add('second-pattern');
   if (frame.defectCount > frame.counts.length * 2e-3) flags.add('hot-pixels');
-  if (inputs.outliers > frame.counts.length * 2e-3 && !flags.has('second-pattern')) flags.add('dust');
+  if (inputs.outliers > frame.counts.length * 2e-3 && !flags.has('second-pattern') && !flags.has('camera-rendered'))
+    flags.add('dust');
   if (
     judgement.unexplained > POOR_FIT &&
     found.fit.cellChiSquare / found.fit.cellCount > 2 &&

@@ -1,3 +1,4 @@
+import { LuDecomposition, Matrix } from 'ml-matrix';
 import type { CameraRecord } from '../../../shared/contracts/measureCase';
 import { trimmedVariance } from './masterFrame';
 
@@ -22,7 +23,7 @@ export function varianceAt(noise: NoiseModel, level: number): number {
 /** Weights of the fourth difference along a row; the sum of their squares is 70. */
 const FOURTH_NORM = 70;
 const LEVELS = 40;
-const MOST_SAMPLES = 400_000;
+const MOST_SAMPLES = 150_000;
 /** How far the frame's own noise may lie from the camera record's before the record is set aside. */
 const RECORD_TOLERANCE = 1.35;
 
@@ -83,46 +84,50 @@ function levelVariances(counts: Float32Array, mask: Uint8Array, widthPx: number,
       difference.push(outer - 4 * inner + 6 * counts[i]);
     }
   }
-  const order = Uint32Array.from(level, (_, i) => i).sort((a, b) => level[a] - level[b]);
+  const sorted = Float64Array.from(level).sort();
+  const edges = groupEdges(sorted);
+  const groups = edges.slice(1).map((): { level: number; differences: number[] } => ({ level: 0, differences: [] }));
+  for (let k = 0; k < level.length; k++) {
+    const group = groups[Math.max(0, Math.min(groups.length - 1, placeOf(edges, level[k]) - 1))];
+    group.level += level[k];
+    group.differences.push(difference[k]);
+  }
   const levels: number[] = [];
   const variances: number[] = [];
   const numbers: number[] = [];
-  // Half of the groups hold equal numbers of pixels, half span equal steps of level, so that the bright few are seen too.
-  const edges = groupEdges(order, level);
-  for (let k = 0; k + 1 < edges.length; k++) {
-    const members = order.subarray(edges[k], edges[k + 1]);
-    if (members.length < 40) continue;
-    let sum = 0;
-    const values = new Float64Array(members.length);
-    members.forEach((m, j) => {
-      sum += level[m];
-      values[j] = difference[m];
-    });
-    levels.push(sum / members.length);
-    variances.push(Math.max(1 / 12 / 4, trimmedVariance(values) / FOURTH_NORM));
-    numbers.push(members.length);
+  for (const { level: sum, differences } of groups) {
+    if (differences.length < 40) continue;
+    levels.push(sum / differences.length);
+    variances.push(Math.max(1 / 12 / 4, trimmedVariance(differences) / FOURTH_NORM));
+    numbers.push(differences.length);
   }
   return { levels, variances, numbers };
 }
 
-function groupEdges(order: Uint32Array, level: number[]): number[] {
-  const n = order.length;
-  if (n === 0) return [0];
-  const edges = new Set<number>([0, n]);
+/** How many of the ascending values are at or below one. */
+function placeOf(ascending: ArrayLike<number>, value: number): number {
+  let from = 0;
+  let to = ascending.length;
+  while (from < to) {
+    const middle = (from + to) >> 1;
+    if (ascending[middle] <= value) from = middle + 1;
+    else to = middle;
+  }
+  return from;
+}
+
+/**
+ * Edges between groups of levels: half of them part the pixels into equal numbers, half the range into equal steps, so
+ * that the bright few are seen too.
+ */
+function groupEdges(sorted: Float64Array): number[] {
+  const n = sorted.length;
+  if (n === 0) return [];
   const half = LEVELS / 2;
-  for (let k = 1; k < half; k++) edges.add(Math.floor((n * k) / half));
-  const low = level[order[0]];
-  const high = level[order[n - 1]];
+  const edges = new Set<number>([sorted[0], sorted[n - 1]]);
   for (let k = 1; k < half; k++) {
-    const target = low + ((high - low) * k) / half;
-    let from = 0;
-    let to = n;
-    while (from < to) {
-      const middle = (from + to) >> 1;
-      if (level[order[middle]] < target) from = middle + 1;
-      else to = middle;
-    }
-    edges.add(from);
+    edges.add(sorted[Math.floor((n * k) / half)]);
+    edges.add(sorted[0] + ((sorted[n - 1] - sorted[0]) * k) / half);
   }
   return [...edges].sort((a, b) => a - b);
 }
@@ -154,7 +159,7 @@ function fitVariance(
         normal[i][n] += weight * basis[terms[i]] * target;
       }
     }
-    const solved = eliminate(normal);
+    const solved = solveAugmented(normal);
     if (solved === null || solved.some((s) => s < 0)) continue;
     const model = { floor: given?.floor ?? 0, perCount: given?.perCount ?? 0, perSquare: 0 };
     terms.forEach((term, i) => {
@@ -178,23 +183,17 @@ function fitVariance(
   return best;
 }
 
-/** Gaussian elimination of an augmented matrix; null when singular. */
-function eliminate(matrix: number[][]): number[] | null {
+/** Solves an augmented system, scaled first; null when it is singular. */
+function solveAugmented(matrix: number[][]): number[] | null {
   const n = matrix.length;
+  if (n === 0) return [];
   const scale = matrix.map((row, i) => Math.sqrt(Math.abs(row[i])) || 1);
-  const a = matrix.map((row, i) => row.map((value, j) => value / scale[i] / (j < n ? scale[j] : 1)));
-  for (let i = 0; i < n; i++) {
-    if (!(Math.abs(a[i][i]) > 1e-12)) return null;
-    for (let k = i + 1; k < n; k++) {
-      const factor = a[k][i] / a[i][i];
-      for (let j = i; j <= n; j++) a[k][j] -= factor * a[i][j];
-    }
-  }
-  const x = new Array<number>(n).fill(0);
-  for (let i = n - 1; i >= 0; i--) {
-    let sum = a[i][n];
-    for (let j = i + 1; j < n; j++) sum -= a[i][j] * x[j];
-    x[i] = sum / a[i][i];
-  }
-  return x.map((value, i) => value / scale[i]);
+  const left = new Matrix(matrix.map((row, i) => row.slice(0, n).map((value, j) => value / (scale[i] * scale[j]))));
+  const right = Matrix.columnVector(matrix.map((row, i) => row[n] / scale[i]));
+  const decomposition = new LuDecomposition(left);
+  if (decomposition.isSingular()) return null;
+  return decomposition
+    .solve(right)
+    .to1DArray()
+    .map((value, i) => value / scale[i]);
 }

@@ -207,6 +207,21 @@ export function fitCells(
   };
 }
 
+/**
+ * How much chi-square would fall if more parameters were free, told from the slopes at the solution alone (Rao's score
+ * test, from memory).
+ */
+export function scoreGain(cells: Cells, noise: NoiseModel, evaluated: CellModel, free: ParameterName[]): number {
+  const { normal, gradient } = assemble(
+    cells,
+    noise,
+    evaluated,
+    free.map((name) => PARAMETERS.indexOf(name)),
+  );
+  const step = solveScaled(normal, gradient, 1e-9);
+  return step === null ? 0 : step.reduce((sum, value, i) => sum + value * gradient[i], 0);
+}
+
 /** Keeps a step within what the model can follow. */
 function admissible(tried: PinholeParameters, from: PinholeParameters): boolean {
   return (

@@ -7,6 +7,7 @@ import {
   cellModel,
   fitCells,
   radiusOf,
+  scoreGain,
   type CellFit,
   type CellModel,
   type ParameterName,
@@ -25,6 +26,8 @@ const TILTED: ParameterName[] = [...ROUND, 'tiltX', 'tiltY'];
 const LEAST_OVAL = 0.0015;
 /** A tilt is believed when it changes the scale across the pattern by more than this, relative. */
 const LEAST_KEYSTONE = 6e-4;
+/** Fall of chi-square by which a shape other than round must pay. */
+const LEAST_GAIN = 30;
 /** Bins to the length λz/D where rings are narrow; never wider than a pixel. */
 const BINS_PER_RING = 40;
 
@@ -100,13 +103,15 @@ export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre
   let shape: Shape = 'round';
   const reach = furthestPx(frame.widthPx, frame.heightPx, values.x, values.y) * optics.pitchMm;
   const perCell = Math.max(1, fit.cellChiSquare / fit.cellCount);
-  const oval = fitCells(cells, optics, noise, fit.values, OVAL);
-  const tilted = fitCells(cells, optics, noise, fit.values, TILTED);
+  const atRound = cellModel(cells, optics, fit.values, true);
+  const worthTrying = (free: ParameterName[]) => scoreGain(cells, noise, atRound, free) / perCell > LEAST_GAIN;
+  const oval = worthTrying(OVAL) ? fitCells(cells, optics, noise, fit.values, OVAL) : fit;
+  const tilted = worthTrying(TILTED) ? fitCells(cells, optics, noise, fit.values, TILTED) : fit;
   const ovalGain = (roundChiSquare - oval.cellChiSquare) / perCell;
   const tiltGain = (roundChiSquare - tilted.cellChiSquare) / perCell;
-  const isOval = ovalGain > 30 && Math.hypot(oval.values.ovalCos, oval.values.ovalSin) > LEAST_OVAL;
+  const isOval = ovalGain > LEAST_GAIN && Math.hypot(oval.values.ovalCos, oval.values.ovalSin) > LEAST_OVAL;
   const isTilted =
-    tiltGain > 30 &&
+    tiltGain > LEAST_GAIN &&
     (Math.hypot(tilted.values.tiltX, tilted.values.tiltY) * reach) / optics.distanceMm > LEAST_KEYSTONE;
   if (isOval && (!isTilted || ovalGain >= tiltGain)) {
     fit = oval;

@@ -5,9 +5,9 @@ import type { RadialBins } from '../profile/radialProfile';
 import { fresnelU, type PinholeOptics } from './PinholeOptics';
 
 /** Ratio of neighbouring sizes of the first search. */
-const RATIO = 1.012;
+const RATIO = 1.022;
 /** Bins of the profile that the search looks at. */
-const MOST_BINS = 240;
+const MOST_BINS = 200;
 /** Part of the level by which a bin may be off in the search: centre not settled yet, uneven response. */
 const SLACK = 0.03;
 /** Below this u the pattern is Airy's for the search. */

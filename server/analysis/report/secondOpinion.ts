@@ -16,6 +16,8 @@ const SIZE = 256;
 const LOWEST = 0.12;
 const HIGHEST = 0.92;
 const RADII = 500;
+/** Blocks to the length λz/D: the blocks' own blur is then small and known. */
+const BLOCKS_PER_FRINGE = 6;
 /** Part of the window's radius over which it falls to nothing. */
 const TAPER = 0.5;
 /** What the window and the reduction to blocks leave, relative. Computed on simulated frames. */
@@ -43,7 +45,7 @@ export function secondOpinion(
   const fringe = (2 * Math.PI * optics.distanceMm) / (optics.waveNumber * firstSizeMm * optics.pitchMm);
   if (reach < 1.25 * fringe) return none('The frame does not show enough of the pattern on all sides.');
   const window = Math.min(reach, 12 * fringe);
-  const block = Math.max(1, Math.ceil((2 * window) / SIZE));
+  const block = Math.max(1, Math.floor(fringe / BLOCKS_PER_FRINGE), Math.ceil((2 * window) / SIZE));
   if (fringe / block < 3) return none('The rings are too narrow for a transform of this size.');
   const spectrum = windowedSpectrum(frame, x, y, window, block);
   const cutOff = (SIZE * block) / fringe;
@@ -109,7 +111,13 @@ export function secondOpinion(
   if (fit.status === 'non-finite' || size.stdUncertainty === null || size.atBound)
     return none('The transform of the frame does not follow that of a round hole.');
   const sizeUm = Math.exp(size.value) * 1000;
-  return { sizeUm, standardUncertaintyUm: sizeUm * Math.hypot(size.stdUncertainty, METHOD), reason: null };
+  // Neighbouring bins are not independent: the window blurs the spectrum over several.
+  const alike = Math.max(1, (SIZE * block) / (2 * window));
+  return {
+    sizeUm,
+    standardUncertaintyUm: sizeUm * Math.hypot(size.stdUncertainty * Math.sqrt(alike), METHOD),
+    reason: null,
+  };
 }
 
 function taper(part: number): number {
