@@ -1,4 +1,9 @@
-import { airRefractiveIndex, HELIUM_NEON_VACUUM, wavelengthInAir } from '../../../shared/optics/airRefractiveIndex';
+import {
+  airRefractiveIndex,
+  HELIUM_NEON_VACUUM,
+  STANDARD_AIR,
+  wavelengthInAir,
+} from '../../../shared/optics/airRefractiveIndex';
 import { fresnelNumber } from '../../../shared/optics/fresnelNumber';
 import {
   opticalDistanceMm,
@@ -60,8 +65,8 @@ test('refractive index of air', () => {
   expect(Math.abs(airRefractiveIndex() - 1.000271375)).toBeLessThan(1e-7);
   // Sensitivities of modified Edlén: −0.93e-6 per kelvin, 2.68e-6 per kilopascal, −0.85e-8 per percent (computed); the shop
   // formula is within 3e-8 per kelvin of them.
-  const change = (air: Partial<typeof standard>) =>
-    airRefractiveIndex({ ...standard, ...air }) - airRefractiveIndex(standard);
+  const change = (air: Partial<typeof STANDARD_AIR>) =>
+    airRefractiveIndex({ ...STANDARD_AIR, ...air }) - airRefractiveIndex(STANDARD_AIR);
   expect(Math.abs(change({ temperatureC: 21 }) + 0.93e-6)).toBeLessThan(3e-8);
   expect(Math.abs(change({ pressureKpa: 102.325 }) - 2.68e-6)).toBeLessThan(1e-8);
   expect(Math.abs(change({ humidityPercent: 51 }) + 0.85e-8)).toBeLessThan(1e-9);
