@@ -112,8 +112,8 @@ async function main() {
   undo.push(claimCheckout(checkout, local));
   await checkPort(mode);
 
-  await ensurePackages(checkout);
   await ensureDebianPackages([postgres]);
+  await ensurePackages(checkout);
 
   const home = clusterHome(checkout);
   undo.push(() => stopCluster(home));

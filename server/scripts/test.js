@@ -26,8 +26,8 @@ function chosenParts() {
 async function main() {
   checkNodeVersion();
   const parts = chosenParts();
-  await ensurePackages(checkout);
   await ensureDebianPackages(parts.some((part) => part.name === 'e2e') ? [postgres, chromium] : [postgres]);
+  await ensurePackages(checkout);
 
   const counts = [];
   const lines = [];

@@ -33,7 +33,7 @@ function launch(file) {
 function requirePackages() {
   if (fs.existsSync(path.join(checkout, 'node_modules', 'tsx', 'package.json'))) return;
   throw new PlainError(
-    `The npm packages are not installed. Run this once, then try again:\n  cd ${checkout} && npm ci`,
+    `The npm packages are not installed. Run this once, then try again:\n  cd '${checkout}' && npm ci`,
   );
 }
 
