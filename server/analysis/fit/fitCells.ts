@@ -48,8 +48,6 @@ export interface CellModel {
 
 const COUNT = PARAMETERS.length;
 const MOST_ITERATIONS = 30;
-/** Power of cos θ with which the irradiance of a flat sensor falls off to the side. */
-const OBLIQUITY = 4;
 
 /** Aperture radius of a state, mm. */
 export function radiusOf(values: PinholeParameters): number {
@@ -112,7 +110,8 @@ export function cellModel(
     const curvature = table[at + 2] + t * (table[next + 2] - table[at + 2]);
     const dvdr = (scale * pitchMm) / Math.sqrt(far);
     const spread = 0.5 * cells.radiusVariance[c] * dvdr * dvdr * curvature;
-    const fall = OBLIQUITY === 4 ? (z * z * z * z) / (far * far) : 1;
+    // Rayleigh–Sommerfeld: the field falls with cos θ and with 1/distance, so the irradiance with cos⁴ θ.
+    const fall = (z * z * z * z) / (far * far);
     const intensity = (hermite(table[at], table[at + 1], table[next], table[next + 1], t) + spread) * fall;
     model[c] = amplitude * intensity + values.background + values.slopeX * cells.x[c] + values.slopeY * cells.y[c];
     if (!withJacobian) continue;

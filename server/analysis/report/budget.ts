@@ -1,6 +1,6 @@
 import type { BudgetLine } from '../../../shared/contracts/measureResult';
 import type { MeasureCase } from '../../../shared/contracts/measureCase';
-import { coverageFactor } from '../../../shared/metrology/coverageFactor';
+import { combineUncertainty } from '../../../shared/metrology/budget';
 import type { SizeSpread } from '../fit/posterior';
 
 export interface Budget {
@@ -114,20 +114,19 @@ export function budget(
 
 /** Adds the lines up. */
 export function combine(lines: BudgetLine[]): Budget {
-  const variance = lines.reduce((sum, line) => sum + line.contributionUm ** 2, 0);
-  const fourth = lines.reduce(
-    (sum, line) => sum + (line.degreesOfFreedom === null ? 0 : line.contributionUm ** 4 / line.degreesOfFreedom),
-    0,
+  const combined = combineUncertainty(
+    lines.map(({ source, contributionUm, degreesOfFreedom }) => ({
+      name: source,
+      standardUncertainty: contributionUm,
+      sensitivity: 1,
+      degreesOfFreedom,
+    })),
   );
-  const effective = fourth > 0 ? variance ** 2 / fourth : Infinity;
-  const degrees = effective > 1e6 ? null : Math.max(1, Math.floor(effective));
-  const k = coverageFactor(degrees);
-  const standard = Math.sqrt(variance);
   return {
     lines,
-    standardUncertaintyUm: standard,
-    effectiveDegreesOfFreedom: degrees,
-    coverageFactor: k,
-    expandedUncertaintyUm: k * standard,
+    standardUncertaintyUm: combined.standardUncertainty,
+    effectiveDegreesOfFreedom: combined.effectiveDegreesOfFreedom,
+    coverageFactor: combined.coverageFactor,
+    expandedUncertaintyUm: combined.expandedUncertainty,
   };
 }
