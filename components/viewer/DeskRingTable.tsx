@@ -22,11 +22,17 @@ interface Props {
 }
 
 const columns = [
-  { title: 'Dark ring', flex: 0.9 },
+  { title: 'Dark ring', flex: 0.75 },
   { title: 'Radius, mm', flex: 1.1 },
-  { title: '±', flex: 0.75 },
+  { title: '±', flex: 0.85 },
   { title: 'Size, µm', flex: 1.1 },
 ] as const;
+const gridCell = webProps({ role: 'gridcell' });
+
+/** Middle of the sorted values: one odd ring does not decide for the column. */
+function middle(places: readonly number[]): number {
+  return [...places].sort((a, b) => a - b)[Math.floor(places.length / 2)] ?? 0;
+}
 
 /** The ring table of the projection sheet: each row stands where its ring's plumb arrives. */
 export function DeskRingTable({ dark, measured, rowYs, headPx, chosenOrder, onChoose }: Props) {
@@ -37,8 +43,8 @@ export function DeskRingTable({ dark, measured, rowYs, headPx, chosenOrder, onCh
   const rowHeight = Math.max(20, Math.min(56, gap - 2));
   const size = rowHeight >= 36 && width >= 430 ? 20 : 15;
   // One number of decimals for a column, so that its points stand under each other.
-  const radiusPlaces = Math.max(0, ...dark.map((r) => placesOfUncertainty(r.uncertaintyMm)));
-  const sizePlaces = Math.max(0, ...dark.map((r) => placesOfUncertainty((r.sizeUm * r.uncertaintyMm) / r.radiusMm)));
+  const radiusPlaces = middle(dark.map((r) => placesOfUncertainty(r.uncertaintyMm)));
+  const sizePlaces = middle(dark.map((r) => placesOfUncertainty((r.sizeUm * r.uncertaintyMm) / r.radiusMm)));
   const cell = (flex: number, i: number) => ({
     flex,
     alignItems: i === 0 ? ('flex-start' as const) : ('flex-end' as const),
@@ -48,65 +54,63 @@ export function DeskRingTable({ dark, measured, rowYs, headPx, chosenOrder, onCh
       onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)}
       style={{ flex: 1, backgroundColor: colours.plate, borderRadius: radius.plate, overflow: 'hidden' }}
     >
-      <View
-        style={{ height: headPx - 2, flexDirection: 'row', alignItems: 'center', paddingLeft: 20, paddingRight: 16 }}
-      >
-        {columns.map((column, i) => (
-          <View key={column.title} style={cell(column.flex, i)}>
-            <Text variant="label">{column.title}</Text>
-          </View>
-        ))}
-      </View>
-      <View
-        {...webProps({ role: 'listbox' })}
-        aria-label="Dark rings"
-        style={{ position: 'absolute', left: 0, right: 0, top: headPx, bottom: 0 }}
-      >
-        {dark.map((ring) => {
-          const y = rowYs.get(ring.order);
-          if (y === undefined) return null;
-          const chosen = ring.order === chosenOrder;
-          const radiusText = formatNumber(ring.radiusMm, { places: radiusPlaces });
-          const errorText = formatNumber(ring.uncertaintyMm, { places: radiusPlaces });
-          const sizeText = formatNumber(ring.sizeUm, { places: sizePlaces });
-          const figure = { fontFamily: fontFamily.figure, fontSize: size, lineHeight: size + 4, color: colours.ink0 };
-          return (
-            <Touch
-              key={ring.order}
-              role="option"
-              selected={chosen}
-              label={`Dark ring ${ring.order}, radius ${radiusText} plus or minus ${errorText} mm, size ${sizeText} µm`}
-              onPress={() => onChoose(chosen ? null : ring.order)}
-              style={({ pressed }) => ({
-                position: 'absolute',
-                left: 0,
-                right: 0,
-                top: y - rowHeight / 2,
-                height: rowHeight,
-                flexDirection: 'row',
-                alignItems: 'center',
-                paddingLeft: 20,
-                paddingRight: 16,
-                backgroundColor: chosen || pressed ? colours.lift : 'transparent',
-              })}
-            >
-              <View style={cell(columns[0].flex, 0)}>
-                <Text variant={chosen ? 'strong' : 'body'} tone="ink0">
-                  {String(ring.order)}
-                </Text>
-              </View>
-              <View style={cell(columns[1].flex, 1)}>
-                <Text style={figure}>{radiusText}</Text>
-              </View>
-              <View style={cell(columns[2].flex, 2)}>
-                <Text>{errorText}</Text>
-              </View>
-              <View style={cell(columns[3].flex, 3)}>
-                <Text style={figure}>{sizeText}</Text>
-              </View>
-            </Touch>
-          );
-        })}
+      <View role="grid" aria-label="Dark rings" style={{ flex: 1 }}>
+        <View
+          role="row"
+          style={{ height: headPx - 2, flexDirection: 'row', alignItems: 'center', paddingLeft: 20, paddingRight: 16 }}
+        >
+          {columns.map((column, i) => (
+            <View key={column.title} role="columnheader" style={cell(column.flex, i)}>
+              <Text variant="label">{column.title}</Text>
+            </View>
+          ))}
+        </View>
+        <View role="rowgroup" style={{ position: 'absolute', left: 0, right: 0, top: headPx, bottom: 0 }}>
+          {dark.map((ring) => {
+            const y = rowYs.get(ring.order);
+            if (y === undefined) return null;
+            const chosen = ring.order === chosenOrder;
+            const radiusText = formatNumber(ring.radiusMm, { places: radiusPlaces });
+            const errorText = formatNumber(ring.uncertaintyMm, { places: radiusPlaces });
+            const sizeText = formatNumber(ring.sizeUm, { places: sizePlaces });
+            const figure = { fontFamily: fontFamily.figure, fontSize: size, lineHeight: size + 4, color: colours.ink0 };
+            return (
+              <Touch
+                key={ring.order}
+                role="row"
+                selected={chosen}
+                onPress={() => onChoose(chosen ? null : ring.order)}
+                style={({ pressed }) => ({
+                  position: 'absolute',
+                  left: 0,
+                  right: 0,
+                  top: y - rowHeight / 2,
+                  height: rowHeight,
+                  flexDirection: 'row',
+                  alignItems: 'center',
+                  paddingLeft: 20,
+                  paddingRight: 16,
+                  backgroundColor: chosen || pressed ? colours.lift : 'transparent',
+                })}
+              >
+                <View {...gridCell} style={cell(columns[0].flex, 0)}>
+                  <Text variant={chosen ? 'strong' : 'body'} tone="ink0">
+                    {String(ring.order)}
+                  </Text>
+                </View>
+                <View {...gridCell} style={cell(columns[1].flex, 1)}>
+                  <Text style={figure}>{radiusText}</Text>
+                </View>
+                <View {...gridCell} style={cell(columns[2].flex, 2)}>
+                  <Text>{errorText}</Text>
+                </View>
+                <View {...gridCell} style={cell(columns[3].flex, 3)}>
+                  <Text style={figure}>{sizeText}</Text>
+                </View>
+              </Touch>
+            );
+          })}
+        </View>
       </View>
       <View style={{ position: 'absolute', left: 20, right: 16, bottom: 12 }}>
         <Text variant="small" tone="ink2">

@@ -20,7 +20,9 @@ const MAX_DASHED_RADIUS_PX = 2500;
 /** Draws the whole sheet: frame, unwrapped view, plumbs, profile and misfit. */
 export function drawSheet(pen: Pen, scene: SheetScene): void {
   const { layout, measured } = scene;
-  pen.rect({ left: 0, top: 0, width: layout.width, height: layout.height }, scene.ground);
+  pen.rect({ left: 0, top: 0, width: layout.width, height: layout.height }, scene.colours.gap);
+  const foot = bottom(layout.frame);
+  pen.rect({ left: 0, top: foot, width: layout.frame.width, height: layout.height - foot }, scene.ground);
   pen.rect(layout.frame, scene.onFrame.gap);
   const unwrapped = scene.view === 'unwrapped' && measured !== null;
   const pane: Box = unwrapped
