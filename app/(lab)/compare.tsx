@@ -12,6 +12,7 @@ import { OutlierFlags } from '@/components/compare/OutlierFlags';
 import { RadiusTable } from '@/components/compare/RadiusTable';
 import { residualLimit } from '@/components/compare/residualLimit';
 import { SlopeAnswer } from '@/components/compare/SlopeAnswer';
+import { asEntered } from '@/components/measurement/asEntered';
 import { Awaited } from '@/components/ui/Awaited';
 import { Button } from '@/components/ui/Button';
 import { EmptyState } from '@/components/ui/EmptyState';
@@ -186,7 +187,10 @@ function Drawing({ line, basis, varied, onBasis }: DrawingProps) {
               : []
           }
           points={points.map((point) => ({ ...point, id: point.measurementId, label: point.serial }))}
-          xTicks={thinned(xs).map((x) => ({ x, label: formatNumber(1 / x, { significant: 4 }) }))}
+          xTicks={thinned(xs).map((x) => ({
+            x,
+            label: basis === 'nominal' ? asEntered(1 / x) : formatNumber(1 / x, { significant: 4 }),
+          }))}
           xTitle="Size, µm, spaced as 1 / size"
           yTitle="Ring radius, mm"
           edgeY={null}

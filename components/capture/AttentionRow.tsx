@@ -55,7 +55,7 @@ export function AttentionRow({
         overflow: 'hidden',
       }}
     >
-      <FrameThumbnail address={thumbnail} kind={frame.kind} widthPx={width} heightPx={desk ? 60 : 70} />
+      <FrameThumbnail address={thumbnail} kind={frame.kind} widthPx={width} heightPx="fill" />
       <View
         style={{
           flex: 1,

@@ -6,7 +6,7 @@ import { Text } from '@/components/ui/Text';
 import { space } from '@/components/ui/tokens';
 import { useLook } from '@/components/ui/useLook';
 import type { Bench } from '@/shared/contracts/benches';
-import { formatNumber } from '@/shared/units/format';
+import { asEntered } from '@/components/measurement/asEntered';
 
 export interface BenchPickerProps {
   benches: readonly Bench[];
@@ -31,10 +31,10 @@ export function BenchPicker({ benches, chosenId, onChoose }: BenchPickerProps) {
             dense={desk}
             leading={<Icon name="bench" colour={chosen ? colours.ink0 : colours.ink1} />}
             title={bench.name}
-            subtitle={`${formatNumber(current.laser.wavelengthNm)} nm, ${formatNumber(current.distanceMm)} mm, ${current.camera.name}`}
+            subtitle={`${asEntered(current.laser.wavelengthNm)} nm, ${asEntered(current.distanceMm)} mm, ${current.camera.name}`}
             selected={chosen}
             onPress={() => onChoose(bench.id)}
-            label={`${bench.name}, ${formatNumber(current.laser.wavelengthNm)} nm${chosen ? ', chosen' : ''}`}
+            label={`${bench.name}, ${asEntered(current.laser.wavelengthNm)} nm${chosen ? ', chosen' : ''}`}
             trailing={
               <Text variant="small" tone="ink2" lines={1}>
                 {`revision ${current.revision}`}

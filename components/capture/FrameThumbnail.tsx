@@ -9,7 +9,8 @@ export interface FrameThumbnailProps {
   address: string | null;
   kind: FrameKind;
   widthPx: number;
-  heightPx: number;
+  /** `fill`: as high as the row. */
+  heightPx: number | 'fill';
 }
 
 /** A small picture of a frame; before it comes the plate stands at its size. The name stands beside it. */
@@ -19,7 +20,8 @@ export function FrameThumbnail({ address, kind, widthPx, heightPx }: FrameThumbn
     <View
       style={{
         width: widthPx,
-        height: heightPx,
+        height: heightPx === 'fill' ? undefined : heightPx,
+        alignSelf: heightPx === 'fill' ? 'stretch' : undefined,
         backgroundColor: colours.well,
         alignItems: 'center',
         justifyContent: 'center',
@@ -33,7 +35,12 @@ export function FrameThumbnail({ address, kind, widthPx, heightPx }: FrameThumbn
           <Icon name="dark" size={20} colour={colours.ink3} />
         )
       ) : (
-        <Image source={{ uri: address }} alt="" resizeMode="cover" style={{ width: widthPx, height: heightPx }} />
+        <Image
+          source={{ uri: address }}
+          alt=""
+          resizeMode="cover"
+          style={{ position: 'absolute', left: 0, top: 0, width: '100%', height: '100%' }}
+        />
       )}
     </View>
   );

@@ -30,14 +30,14 @@ export function MeanSoFar({ serial, mean, lights }: MeanSoFarProps) {
   return (
     <View style={{ flexDirection: 'row', alignItems: 'center', gap: desk ? 22 : space.l, flexShrink: 1 }}>
       <ProgressRing
-        segments={segments}
+        segments={segments.length === 0 ? [{ state: 'waiting' }] : segments}
         size={desk ? 132 : 112}
         label={`${measured} of ${segments.length} ${many}${refused > 0 ? `, ${refused} refused` : ''}`}
       >
         <Text variant="large" style={{ fontSize: desk ? 40 : 34, lineHeight: desk ? 42 : 36 }}>
           {measured}
         </Text>
-        <Text variant="label">{`of ${segments.length} ${many}`}</Text>
+        <Text variant="label">{segments.length === 0 ? 'sizes' : `of ${segments.length} ${many}`}</Text>
       </ProgressRing>
       <View style={{ flexShrink: 1 }}>
         <Text variant="label">{desk ? `${serial}, mean so far` : 'Mean so far'}</Text>
@@ -45,7 +45,6 @@ export function MeanSoFar({ serial, mean, lights }: MeanSoFarProps) {
           <>
             <Text
               variant="hero"
-              lines={1}
               live
               style={{ fontSize: size, lineHeight: size + 3, letterSpacing: -0.04 * size, marginLeft: -3 }}
             >

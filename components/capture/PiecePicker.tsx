@@ -6,7 +6,8 @@ import { Text } from '@/components/ui/Text';
 import { space } from '@/components/ui/tokens';
 import { useLook } from '@/components/ui/useLook';
 import type { Aperture } from '@/shared/contracts/lots';
-import { formatMeasuredText, formatNumber } from '@/shared/units/format';
+import { formatMeasured, formatMeasuredText } from '@/shared/units/format';
+import { asEntered } from '@/components/measurement/asEntered';
 
 export interface PiecePickerProps {
   apertures: readonly Aperture[];
@@ -20,7 +21,7 @@ export interface PiecePickerProps {
 const MOST = 60;
 
 const nominal = (aperture: Aperture) =>
-  `${formatNumber(aperture.nominalSizeUm)} µm ${aperture.kind}${aperture.toleranceUm === null ? '' : `, ± ${formatNumber(aperture.toleranceUm)} µm`}`;
+  `${asEntered(aperture.nominalSizeUm)}${aperture.toleranceUm === null ? '' : ` ± ${asEntered(aperture.toleranceUm)}`} µm ${aperture.kind}`;
 
 /** The pieces to choose from, those without a size first. */
 export function PiecePicker({ apertures, chosenId, onChoose, search }: PiecePickerProps) {
@@ -50,7 +51,9 @@ export function PiecePicker({ apertures, chosenId, onChoose, search }: PiecePick
             trailing={
               <Text variant="small" tone="ink2" lines={1}>
                 {aperture.newest?.sizeUm
-                  ? formatMeasuredText(aperture.newest.sizeUm, aperture.newest.expandedUncertaintyUm, 'µm')
+                  ? desk
+                    ? formatMeasuredText(aperture.newest.sizeUm, aperture.newest.expandedUncertaintyUm, 'µm')
+                    : formatMeasured(aperture.newest.sizeUm, aperture.newest.expandedUncertaintyUm).value
                   : desk
                     ? `lot ${aperture.lotNumber}`
                     : (aperture.newest?.state ?? '')}

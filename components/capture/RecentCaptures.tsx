@@ -18,7 +18,7 @@ export function RecentCaptures({ captures }: { captures: readonly Capture[] }) {
           key={capture.id}
           icon="capture"
           title={capture.apertureSerial}
-          subtitle={`${formatDateTime(capture.createdAt)}, ${capture.benchName}, ${capture.createdBy}`}
+          subtitle={`${formatDateTime(capture.createdAt)}, ${capture.benchName}`}
           href={`/captures/${capture.id}`}
           trailing={
             <Text variant="small" tone="ink2" lines={1}>

@@ -41,7 +41,7 @@ export function SendingRow({ file, onKind, onCancel, onRetry, onDismiss }: Sendi
         overflow: 'hidden',
       }}
     >
-      <FrameThumbnail address={null} kind={file.kind} widthPx={width} heightPx={54} />
+      <FrameThumbnail address={null} kind={file.kind} widthPx={width} heightPx="fill" />
       <View style={{ flex: 1, minWidth: 0, paddingLeft: 12, paddingVertical: 6, gap: 4 }}>
         <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.m }}>
           <Text

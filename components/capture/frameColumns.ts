@@ -2,9 +2,9 @@
 export const frameColumns = {
   gap: 12,
   thumbnail: 64,
-  exposure: 62,
-  peak: 122,
-  noise: 48,
-  outcome: 168,
+  exposure: 58,
+  peak: 110,
+  noise: 44,
+  outcome: 144,
   more: 48,
 } as const;

@@ -6,8 +6,8 @@ import type { CompareLineResult, SizeBasis } from './compareLine';
 
 /** Pieces that do not lie on the line, and what that says. */
 export function OutlierFlags({ line, basis }: { line: CompareLineResult; basis: SizeBasis }) {
-  const { outliers, strangers } = line;
-  if (outliers.length + strangers.length === 0) return null;
+  const { outliers, strangers, ringless } = line;
+  if (outliers.length + strangers.length + ringless.length === 0) return null;
   return (
     <Plate>
       <View role="list">
@@ -24,6 +24,14 @@ export function OutlierFlags({ line, basis }: { line: CompareLineResult; basis: 
             <Flag
               title={`${serial} has another bench constant`}
               detail="Its wavelength or distance differs from that of the first one chosen. It is left out of the line."
+            />
+          </View>
+        ))}
+        {ringless.map(({ measurementId, serial }) => (
+          <View key={measurementId} role="listitem">
+            <Flag
+              title={`${serial} has no dark ring to compare`}
+              detail="No dark ring of its pattern lies on the sensor. A shorter distance brings them in."
             />
           </View>
         ))}

@@ -37,6 +37,8 @@ export interface CompareLineResult {
   outliers: Outlier[];
   /** Measurements of another wavelength or distance than the first: they lie on a line of their own. */
   strangers: { measurementId: string; serial: string }[];
+  /** Chosen, but without a dark ring on the sensor. */
+  ringless: { measurementId: string; serial: string }[];
   usedCount: number;
 }
 
@@ -142,7 +144,10 @@ export function compareLine(chosen: readonly Compared[], basis: SizeBasis): Comp
   const usedCount = new Set(used.map((point) => point.measurementId)).size;
   const sizes = new Set(used.map((point) => point.x));
   const reason = usedCount < FEWEST ? 'too-few' : sizes.size < 2 ? 'one-size' : null;
-  const base = { outliers, strangers, usedCount };
+  const ringless = chosen
+    .filter((one) => !one.rings.some((ring) => ring.kind === 'dark'))
+    .map(({ measurementId, apertureSerial }) => ({ measurementId, serial: apertureSerial }));
+  const base = { outliers, strangers, ringless, usedCount };
   if (reason !== null) return { ...base, points: all, fit: null, reason };
   const fit = fitOf(used, basis);
   const points = all.map((point) => {

@@ -5,6 +5,7 @@ import { space } from '@/components/ui/tokens';
 import { useLook } from '@/components/ui/useLook';
 import { VerdictGlyph } from '@/components/ui/VerdictGlyph';
 import { formatMeasuredText, formatNumber } from '@/shared/units/format';
+import { asEntered } from './asEntered';
 import { tolerancePosition } from './tolerancePosition';
 
 export interface ToleranceLineProps {
@@ -32,7 +33,7 @@ export function ToleranceLine({ sizeUm, expandedUncertaintyUm, nominalSizeUm, to
   if (toleranceUm === null || toleranceUm <= 0) {
     return (
       <Text variant="small" tone="ink2">
-        {`Nominal ${formatNumber(nominalSizeUm, { significant: 5 })} µm. No tolerance agreed.`}
+        {`Nominal ${asEntered(nominalSizeUm)} µm. No tolerance agreed.`}
       </Text>
     );
   }
@@ -40,14 +41,18 @@ export function ToleranceLine({ sizeUm, expandedUncertaintyUm, nominalSizeUm, to
   const margin = desk ? -20 : -space.l;
   return (
     <View>
-      <View style={{ flexDirection: 'row', alignItems: 'center', gap: 11, flexWrap: 'wrap' }}>
+      <View style={{ flexDirection: 'row', alignItems: 'center', gap: 11 }}>
         <VerdictGlyph verdict="open" scale={1.25} />
-        <Text variant="strong" style={{ flexShrink: 1 }}>
-          {sentence(words)}
-        </Text>
-        <View style={{ marginLeft: 'auto', flexShrink: 1 }}>
-          <Text variant="small" tone="ink2" align="right">
-            {across ? 'The uncertainty reaches over the limit.' : 'No verdict yet.'}
+        <View
+          style={
+            desk
+              ? { flex: 1, flexDirection: 'row', justifyContent: 'space-between', alignItems: 'center', gap: space.m }
+              : { flex: 1 }
+          }
+        >
+          <Text variant="strong">{sentence(words)}</Text>
+          <Text variant="small" tone="ink2">
+            {across ? 'The uncertainty reaches over the limit. No verdict yet.' : 'No verdict yet.'}
           </Text>
         </View>
       </View>

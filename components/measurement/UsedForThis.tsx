@@ -3,7 +3,8 @@ import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
 import type { MeasurementDetail } from '@/shared/contracts/measurements';
 import type { Illumination } from '@/shared/contracts/benches';
-import { formatMeasuredText, formatNumber, formatQuantity } from '@/shared/units/format';
+import { formatMeasuredText, formatNumber } from '@/shared/units/format';
+import { asEntered } from './asEntered';
 
 /** The light on the aperture, in words. */
 export function illuminationWords(illumination: Illumination): string {
@@ -11,9 +12,9 @@ export function illuminationWords(illumination: Illumination): string {
     case 'plane':
       return 'Plane wave';
     case 'diverging':
-      return `Diverging, source at ${formatQuantity(illumination.sourceDistanceMm, 'mm')}`;
+      return `Diverging, source at ${asEntered(illumination.sourceDistanceMm)} mm`;
     case 'gaussian':
-      return `Gaussian, radius ${formatQuantity(illumination.beamRadiusUm, 'µm')}`;
+      return `Gaussian, radius ${asEntered(illumination.beamRadiusUm)} µm`;
   }
 }
 
@@ -38,10 +39,10 @@ export function UsedForThis({ measurement }: { measurement: MeasurementDetail })
     ['Pixel pitch', formatMeasuredText(inputs.pixelPitchUm, given.pixelPitchUm, 'µm')],
     ...(glass > 0
       ? [
-          [
-            'Cover glass',
-            `${formatQuantity(glass, 'mm')}, index ${formatNumber(inputs.camera.coverGlassIndex ?? 1.5)}`,
-          ] as [string, string],
+          ['Cover glass', `${asEntered(glass)} mm, index ${asEntered(inputs.camera.coverGlassIndex ?? 1.5)}`] as [
+            string,
+            string,
+          ],
         ]
       : []),
     ['Darks', settings.useDarks ? (measurement.darkCount === 0 ? 'None' : String(measurement.darkCount)) : 'Not used'],
@@ -62,7 +63,10 @@ export function UsedForThis({ measurement }: { measurement: MeasurementDetail })
     ['Frame', measurement.frameName],
   ];
   return (
-    <Section title="Used for this number" note="Uncertainties are standard uncertainties, k = 1">
+    <Section
+      title={measured ? 'Used for this number' : 'Used for this run'}
+      note="Uncertainties are standard uncertainties, k = 1"
+    >
       <KeyValueList entries={entries} />
       {measured && measured.assumed.length > 0 ? (
         <Text variant="small" tone="ink2" style={{ marginTop: 8 }}>

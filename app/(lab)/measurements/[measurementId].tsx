@@ -1,8 +1,9 @@
 import { useLocalSearchParams, router } from 'expo-router';
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { Image, View } from 'react-native';
 import { LotPieces } from '@/components/capture/LotPieces';
 import { AgainForm } from '@/components/measurement/AgainForm';
+import { asEntered } from '@/components/measurement/asEntered';
 import { BudgetBars } from '@/components/measurement/BudgetBars';
 import { HistoryList } from '@/components/measurement/HistoryList';
 import { RefusedAnswer } from '@/components/measurement/RefusedAnswer';
@@ -64,7 +65,7 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
   const stopped = measurement.state === 'refused' || measurement.state === 'failed';
   const running = measurement.state === 'waiting' || measurement.state === 'measuring';
   const wide = layout !== 'phone';
-  const nominal = `${formatNumber(measurement.nominalSizeUm)} µm`;
+  const nominal = `${asEntered(measurement.nominalSizeUm)} µm`;
 
   const foot = again ? (
     <Again measurement={measurement} onClose={() => setAgain(false)} />
@@ -104,11 +105,7 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
   return (
     <Screen
       title={measurement.apertureSerial}
-      subtitle={
-        desk
-          ? `${nominal}, ${measurement.finishedAt ? `measured ${formatDateTime(measurement.finishedAt)}` : `begun ${formatDateTime(measurement.createdAt)}`} by ${measurement.createdBy}`
-          : `${nominal}, lot ${measurement.lotNumber}`
-      }
+      subtitle={desk ? nominal : `${nominal}, lot ${measurement.lotNumber}`}
       back={desk ? undefined : `/captures/${measurement.captureId}`}
       action={
         desk ? (
@@ -162,13 +159,20 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
         </>
       ) : null}
       {measured ? <Size measurement={measurement} measured={measured} /> : null}
-      {measured ? <Belief measurement={measurement} measured={measured} /> : null}
-      {measured && !wide ? (
-        <RingTable
-          rings={measured.rings}
-          expandedUncertaintyUm={measured.expandedUncertaintyUm}
-          chosenOrder={chosenOrder}
-          onChooseRing={chooseRing}
+      {measured ? (
+        <Belief
+          measurement={measurement}
+          measured={measured}
+          ringTable={
+            wide ? null : (
+              <RingTable
+                rings={measured.rings}
+                expandedUncertaintyUm={measured.expandedUncertaintyUm}
+                chosenOrder={chosenOrder}
+                onChooseRing={chooseRing}
+              />
+            )
+          }
         />
       ) : null}
       {running ? null : <UsedForThis measurement={measurement} />}
@@ -179,12 +183,18 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
 }
 
 function Size({ measurement, measured }: { measurement: MeasurementDetail; measured: Measured }) {
+  const { desk } = useLook();
   const size = formatMeasured(measured.sizeUm, measured.expandedUncertaintyUm);
   const darks = measurement.darkCount === 1 ? '1 dark' : `${measurement.darkCount} darks`;
   const k =
     measured.coverageFactor === null ? null : `k = ${formatNumber(measured.coverageFactor, { places: 2 })}, 95 %`;
   return (
     <Plate>
+      {desk ? (
+        <Text tone="ink2" style={{ marginBottom: 4 }}>
+          {`Measured ${formatDateTime(measurement.finishedAt)} by ${measurement.createdBy}, ${measurement.benchName} revision ${measurement.benchRevision}`}
+        </Text>
+      ) : null}
       <HeroNumber
         value={size.value}
         uncertainty={size.uncertainty ?? undefined}
@@ -207,7 +217,14 @@ function Size({ measurement, measured }: { measurement: MeasurementDetail; measu
   );
 }
 
-function Belief({ measurement, measured }: { measurement: MeasurementDetail; measured: Measured }) {
+interface BeliefProps {
+  measurement: MeasurementDetail;
+  measured: Measured;
+  /** On a phone it stands among these; elsewhere beside the frame. */
+  ringTable: ReactNode;
+}
+
+function Belief({ measurement, measured, ringTable }: BeliefProps) {
   const { desk } = useLook();
   const flags = sayFlags(measurement.flags, measured.budget);
   const { standardUncertaintyUm, expandedUncertaintyUm, coverageFactor } = measured;
@@ -242,6 +259,7 @@ function Belief({ measurement, measured }: { measurement: MeasurementDetail; mea
       <>
         {said}
         <ThreeWays result={measured} />
+        {ringTable}
         {budget}
         <ShapeSection result={measured} />
       </>
@@ -255,6 +273,7 @@ function Belief({ measurement, measured }: { measurement: MeasurementDetail; mea
         <View style={{ flex: 1, gap: space.hair }}>
           <ThreeWays result={measured} />
           <ShapeSection result={measured} />
+          <Plate padding="none" style={{ flexGrow: 1 }} />
         </View>
       </View>
     </>

@@ -23,6 +23,7 @@ import { MeasureLine } from '@/components/capture/MeasureLine';
 import { newestMeasured } from '@/components/capture/newestMeasured';
 import { SendingRow } from '@/components/capture/SendingRow';
 import { SizesAsTheyArrive } from '@/components/capture/SizesAsTheyArrive';
+import { asEntered } from '@/components/measurement/asEntered';
 import { Awaited } from '@/components/ui/Awaited';
 import { Button } from '@/components/ui/Button';
 import { EmptyState } from '@/components/ui/EmptyState';
@@ -44,7 +45,7 @@ import { useDrop } from '@/hooks/upload/useDrop';
 import { useUploads } from '@/hooks/upload/useUploads';
 import type { CaptureDetail, CaptureFrame, FrameKind } from '@/shared/contracts/captures';
 import { BENCH } from '@/shared/contracts/roles';
-import { formatNumber, formatTime } from '@/shared/units/format';
+import { formatTime } from '@/shared/units/format';
 
 const pickFrom = { camera: snapFrame, library: pickFromLibrary, files: pickStills };
 
@@ -117,7 +118,7 @@ function Capture({ capture }: { capture: CaptureDetail }) {
   return (
     <Screen
       title={capture.apertureSerial}
-      subtitle={`${formatNumber(capture.nominalSizeUm)} µm, lot ${capture.lotNumber}`}
+      subtitle={`${asEntered(capture.nominalSizeUm)} µm, lot ${capture.lotNumber}`}
       back={`/lots/${capture.lotId}`}
       wavelengthNm={capture.wavelengthNm}
       benchLabel={capture.benchName}
