@@ -130,8 +130,8 @@ async function main() {
   const worker = startService({ name: 'worker', file: 'server/worker/workerMain.ts', env, logFolder });
   undo.push(worker.end);
   const broken = Promise.race([api.givenUp, worker.givenUp]);
-  await Promise.race([broken, healthy('api', `${local}/api/health`, api.logFile)]);
-  await Promise.race([broken, healthy('worker', `http://127.0.0.1:${env.WORKER_PORT}/health`, worker.logFile)]);
+  await Promise.race([broken, healthy('api', `${local}/api/health`, api)]);
+  await Promise.race([broken, healthy('worker', `http://127.0.0.1:${env.WORKER_PORT}/health`, worker)]);
 
   if (mode.name === 'demo') await Promise.race([broken, seedDemo(home, env, local)]);
   await announce(mode, env, local);
@@ -171,10 +171,13 @@ async function serviceEnvironment(mode, databaseUrl, local) {
 /**
  * @param {string} name
  * @param {string} url
- * @param {string} logFile
+ * @param {import('./lib/service.js').Service} service
  */
-async function healthy(name, url, logFile) {
-  if (await answersWithin(url, 60_000)) return;
+async function healthy(name, url, { logFile, nowHealthy }) {
+  if (await answersWithin(url, 60_000)) {
+    nowHealthy();
+    return;
+  }
   throw new PlainError(
     `The ${name} did not answer within a minute. The end of its log (${logFile}):\n${lastLines(logFile)}`,
   );

@@ -3,17 +3,20 @@ const fs = require('node:fs');
 const path = require('node:path');
 const { startChild, endChild } = require('./children.js');
 const { checkout, typeScript, typeScriptEnvironment } = require('./checkout.js');
+const { PlainError } = require('./plainError.js');
 const { say } = require('./say.js');
 
 const patienceMs = 60_000;
 const restartsAllowed = 3;
 
 /**
- * The api or a worker, kept alive: one that ends by itself is started again, up to three times within a minute.
+ * The api or a worker, kept alive: one that ends by itself after it has once answered is started again, up to three
+ * times within a minute.
  * @typedef {object} Service
  * @property {string} logFile
+ * @property {() => void} nowHealthy to be called when it has answered
  * @property {() => Promise<void>} end
- * @property {Promise<never>} givenUp rejects when it ended by itself too often
+ * @property {Promise<never>} givenUp rejects when it never came up, or ended by itself too often
  *
  * @typedef {{ name: string, file: string, env: NodeJS.ProcessEnv, logFolder: string }} ServiceChoice
  */
@@ -28,6 +31,7 @@ function startService({ name, file, env, logFolder }) {
   if (fs.existsSync(logFile)) fs.renameSync(logFile, `${logFile}.1`);
   const log = fs.openSync(logFile, 'a', 0o600);
   let wanted = true;
+  let healthy = false;
   /** @type {number[]} */
   let restarts = [];
   /** @type {import('./children.js').Child} */
@@ -50,8 +54,11 @@ function startService({ name, file, env, logFolder }) {
       if (!wanted) return;
       restarts = restarts.filter((at) => at > Date.now() - patienceMs).concat(Date.now());
       const how = signal ?? `code ${status}`;
-      if (restarts.length > restartsAllowed) {
-        giveUp(new Error(`The ${name} ended by itself (${how}) again and again.\n${lastLines(logFile)}`));
+      if (!healthy || restarts.length > restartsAllowed) {
+        const often = healthy ? 'ended by itself again and again' : 'did not come up';
+        giveUp(
+          new PlainError(`The ${name} ${often} (${how}). The end of its log (${logFile}):\n${lastLines(logFile)}`),
+        );
         return;
       }
       say(`The ${name} ended by itself (${how}); starting it again. Its log: ${logFile}`);
@@ -62,6 +69,7 @@ function startService({ name, file, env, logFolder }) {
   return {
     logFile,
     givenUp,
+    nowHealthy: () => (healthy = true),
     end: async () => {
       wanted = false;
       await endChild(child);
