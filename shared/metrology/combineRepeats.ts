@@ -53,14 +53,11 @@ export function combineRepeats(repeats: readonly Repeat[], options: CombineOptio
   const rawWeights = own.map((value) => (allKnown ? 1 / value ** 2 : 1));
   const total = rawWeights.reduce((sum, weight) => sum + weight, 0);
   const weights = rawWeights.map((weight) => weight / total);
-  const sizeUm = repeats.reduce((sum, repeat, index) => sum + (weights[index] as number) * repeat.sizeUm, 0);
+  const sizeUm = repeats.reduce((sum, repeat, index) => sum + weights[index] * repeat.sizeUm, 0);
 
   const terms: { variance: number; degreesOfFreedom: number | null }[] = [];
-  const stated = Math.hypot(0, ...own.map((value, index) => value * (weights[index] as number)));
-  const spread = repeats.reduce(
-    (sum, repeat, index) => sum + (weights[index] as number) * (repeat.sizeUm - sizeUm) ** 2,
-    0,
-  );
+  const stated = Math.hypot(0, ...own.map((value, index) => value * weights[index]));
+  const spread = repeats.reduce((sum, repeat, index) => sum + weights[index] * (repeat.sizeUm - sizeUm) ** 2, 0);
   const shown = count > 1 ? Math.sqrt(spread / (count - 1)) : 0;
   const scatterUncertaintyUm = Math.max(stated, shown);
   terms.push({ variance: scatterUncertaintyUm ** 2, degreesOfFreedom: shown > stated ? count - 1 : null });
@@ -73,7 +70,7 @@ export function combineRepeats(repeats: readonly Repeat[], options: CombineOptio
     let degreesOfFreedom: number | null = null;
     repeats.forEach(({ budget }, index) => {
       for (const line of budget.filter((candidate) => candidate.source === source)) {
-        contribution += (weights[index] as number) * Math.abs(line.contributionUm);
+        contribution += weights[index] * Math.abs(line.contributionUm);
         if (line.degreesOfFreedom !== null)
           degreesOfFreedom = Math.min(degreesOfFreedom ?? Infinity, line.degreesOfFreedom);
       }

@@ -65,14 +65,14 @@ export function fitLine(points: readonly LinePoint[]): LineFit {
   });
   const total = weights.reduce((sum, weight) => sum + weight, 0);
   const mean = (of: (point: LinePoint) => number) =>
-    points.reduce((sum, point, index) => sum + (weights[index] as number) * of(point), 0) / total;
+    points.reduce((sum, point, index) => sum + weights[index] * of(point), 0) / total;
   const xMean = mean(({ x }) => x);
   const yMean = mean(({ y }) => y);
   const spread = total * mean(({ x }) => (x - xMean) ** 2);
   const slope = (total * mean(({ x, y }) => (x - xMean) * (y - yMean))) / spread;
   const intercept = yMean - slope * xMean;
   const residuals = points.map(({ x, y }) => y - yMean - slope * (x - xMean));
-  const chiSquare = residuals.reduce((sum, residual, index) => sum + (weights[index] as number) * residual ** 2, 0);
+  const chiSquare = residuals.reduce((sum, residual, index) => sum + weights[index] * residual ** 2, 0);
   const degreesOfFreedom = points.length - 2;
   const reducedChiSquare = degreesOfFreedom > 0 ? chiSquare / degreesOfFreedom : null;
   const scale = weighted ? 1 : reducedChiSquare;
@@ -83,9 +83,7 @@ export function fitLine(points: readonly LinePoint[]): LineFit {
     slopeUncertainty: scale === null ? null : Math.sqrt(scale / spread),
     covariance: scale === null ? null : (-scale * xMean) / spread,
     residuals,
-    standardisedResiduals: weighted
-      ? residuals.map((residual, index) => residual * Math.sqrt(weights[index] as number))
-      : null,
+    standardisedResiduals: weighted ? residuals.map((residual, index) => residual * Math.sqrt(weights[index])) : null,
     chiSquare,
     reducedChiSquare,
     degreesOfFreedom,
@@ -123,15 +121,13 @@ export function fitLineBothErrors(points: readonly LinePointBoth[]): LineFit {
       return 1 / Math.max(variance, 1e-300);
     });
     const total = weights.reduce((sum, weight) => sum + weight, 0);
-    const xMean = points.reduce((sum, { x }, index) => sum + (weights[index] as number) * x, 0) / total;
-    const yMean = points.reduce((sum, { y }, index) => sum + (weights[index] as number) * y, 0) / total;
+    const xMean = points.reduce((sum, { x }, index) => sum + weights[index] * x, 0) / total;
+    const yMean = points.reduce((sum, { y }, index) => sum + weights[index] * y, 0) / total;
     const adjustments = points.map(({ x, y, xUncertainty, yUncertainty, correlation = 0 }, index) => {
       const u = x - xMean;
       const v = y - yMean;
       const cross = correlation * xUncertainty * yUncertainty;
-      return (
-        (weights[index] as number) * (u * yUncertainty ** 2 + slope * v * xUncertainty ** 2 - (slope * u + v) * cross)
-      );
+      return weights[index] * (u * yUncertainty ** 2 + slope * v * xUncertainty ** 2 - (slope * u + v) * cross);
     });
     return { weights, total, xMean, yMean, adjustments };
   };
@@ -145,7 +141,7 @@ export function fitLineBothErrors(points: readonly LinePointBoth[]): LineFit {
     let numerator = 0;
     let denominator = 0;
     points.forEach(({ x, y }, index) => {
-      const pull = (weights[index] as number) * (adjustments[index] as number);
+      const pull = weights[index] * adjustments[index];
       numerator += pull * (y - yMean);
       denominator += pull * (x - xMean);
     });
@@ -156,10 +152,10 @@ export function fitLineBothErrors(points: readonly LinePointBoth[]): LineFit {
 
   const { weights, total, xMean, yMean, adjustments } = at(slope);
   const adjusted = adjustments.map((adjustment) => xMean + adjustment);
-  const adjustedMean = adjusted.reduce((sum, x, index) => sum + (weights[index] as number) * x, 0) / total;
-  const spread = adjusted.reduce((sum, x, index) => sum + (weights[index] as number) * (x - adjustedMean) ** 2, 0);
+  const adjustedMean = adjusted.reduce((sum, x, index) => sum + weights[index] * x, 0) / total;
+  const spread = adjusted.reduce((sum, x, index) => sum + weights[index] * (x - adjustedMean) ** 2, 0);
   const residuals = points.map(({ x, y }) => y - yMean - slope * (x - xMean));
-  const standardisedResiduals = residuals.map((residual, index) => residual * Math.sqrt(weights[index] as number));
+  const standardisedResiduals = residuals.map((residual, index) => residual * Math.sqrt(weights[index]));
   const chiSquare = standardisedResiduals.reduce((sum, residual) => sum + residual ** 2, 0);
   return {
     intercept: yMean - slope * xMean,

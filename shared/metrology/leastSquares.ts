@@ -1,5 +1,7 @@
 import { levenbergMarquardt } from 'ml-levenberg-marquardt';
-import { CholeskyDecomposition, EigenvalueDecomposition, Matrix } from 'ml-matrix';
+import { Matrix } from 'ml-matrix';
+import { invertScaled, normalEquations } from './normalEquations';
+import { planStep } from './planStep';
 
 export interface LeastSquaresParameter {
   name: string;
@@ -78,99 +80,6 @@ interface State {
   chiSquare: number;
 }
 
-/** Sum of products of two free columns of the Jacobian. */
-function normalMatrix({ jacobian, residuals }: State, freeCount: number): { matrix: Matrix; gradient: Float64Array } {
-  const matrix = Matrix.zeros(freeCount, freeCount);
-  const gradient = new Float64Array(freeCount);
-  const sums = new Float64Array(freeCount * freeCount);
-  for (let point = 0, at = 0; point < residuals.length; point += 1, at += freeCount) {
-    const residual = residuals[point] as number;
-    for (let row = 0; row < freeCount; row += 1) {
-      const value = jacobian[at + row] as number;
-      gradient[row] = (gradient[row] as number) + value * residual;
-      for (let column = row; column < freeCount; column += 1)
-        sums[row * freeCount + column] =
-          (sums[row * freeCount + column] as number) + value * (jacobian[at + column] as number);
-    }
-  }
-  for (let row = 0; row < freeCount; row += 1)
-    for (let column = row; column < freeCount; column += 1) {
-      matrix.set(row, column, sums[row * freeCount + column] as number);
-      matrix.set(column, row, sums[row * freeCount + column] as number);
-    }
-  return { matrix, gradient };
-}
-
-/** Inverse of a symmetric positive definite matrix, columns scaled to equal size first; null when it has none. */
-function invertScaled(matrix: Matrix): Matrix | null {
-  const size = matrix.rows;
-  const scale = Array.from({ length: size }, (_, index) => 1 / Math.sqrt(matrix.get(index, index)));
-  if (!scale.every((value) => Number.isFinite(value))) return null;
-  const scaled = new Matrix(size, size);
-  for (let row = 0; row < size; row += 1)
-    for (let column = 0; column < size; column += 1)
-      scaled.set(row, column, matrix.get(row, column) * ((scale[row] as number) * (scale[column] as number)));
-  const cholesky = new CholeskyDecomposition(scaled);
-  if (!cholesky.isPositiveDefinite()) return null;
-  // A pivot this small is rounding: two columns say the same.
-  if (cholesky.lowerTriangularMatrix.diagonal().some((pivot) => pivot < 1e-7)) return null;
-  const inverse = cholesky.solve(Matrix.eye(size));
-  for (let row = 0; row < size; row += 1)
-    for (let column = 0; column < size; column += 1)
-      inverse.set(row, column, inverse.get(row, column) * ((scale[row] as number) * (scale[column] as number)));
-  return inverse.to1DArray().every((value) => Number.isFinite(value)) ? inverse : null;
-}
-
-interface PlannedStep {
-  damping: number;
-  /** Length of the step in scaled parameters. */
-  length: number;
-  predictedDecrease: number;
-  /** Whether the limit left the step undamped. */
-  full: boolean;
-}
-
-/** Keeps a step finite where the data do not determine a parameter; scaled columns are at most of length one. */
-const SMALLEST_DAMPING = 1e-13;
-
-/** The damping that keeps a step in scaled parameters within a radius (to 1 %), by the eigenvalues of the scaled normal matrix. */
-function planStep(matrix: Matrix, gradient: number[], scale: number[], radius: number): PlannedStep {
-  const scaled = new Matrix(matrix.rows, matrix.rows);
-  for (let row = 0; row < matrix.rows; row += 1)
-    for (let column = 0; column < matrix.rows; column += 1)
-      scaled.set(row, column, matrix.get(row, column) / ((scale[row] as number) * (scale[column] as number)));
-  const { realEigenvalues, eigenvectorMatrix } = new EigenvalueDecomposition(scaled, { assumeSymmetric: true });
-  const pull = gradient.map((value, at) => value / (scale[at] as number));
-  const along = realEigenvalues.map((_, index) =>
-    pull.reduce((sum, value, at) => sum + value * eigenvectorMatrix.get(at, index), 0),
-  );
-  const smallest = Number.EPSILON * Math.max(...realEigenvalues);
-  const stepAlong = (damping: number) =>
-    along.map((value, index) => value / (Math.max(realEigenvalues[index] as number, smallest) + damping));
-  const lengthAt = (damping: number) => Math.hypot(...stepAlong(damping));
-
-  let damping = SMALLEST_DAMPING;
-  const full = lengthAt(0) <= radius;
-  if (!full) {
-    let low = 0;
-    let high = Math.hypot(...along) / radius;
-    while (lengthAt(high) < 0.99 * radius || lengthAt(high) > radius) {
-      const middle = (low + high) / 2;
-      if (middle === low || middle === high) break;
-      if (lengthAt(middle) > radius) low = middle;
-      else high = middle;
-      if (lengthAt(high) >= 0.99 * radius) break;
-    }
-    damping = high;
-  }
-  const steps = stepAlong(damping);
-  const predictedDecrease = steps.reduce(
-    (sum, step, index) => sum + step * (2 * (along[index] as number) - (realEigenvalues[index] as number) * step),
-    0,
-  );
-  return { damping, length: Math.hypot(...steps), predictedDecrease, full };
-}
-
 /**
  * Non-linear least squares by Levenberg-Marquardt, with bounds, covariance and an honest account of how it ended.
  *
@@ -203,7 +112,7 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
 
   const fullValues = (freeValues: ArrayLike<number>) => {
     const values = Float64Array.from(parameters, ({ initialValue }) => initialValue);
-    free.forEach((index, at) => (values[index] = freeValues[at] as number));
+    free.forEach((index, at) => (values[index] = freeValues[at]));
     return values;
   };
   const evaluateAt = (freeValues: ArrayLike<number>): State => {
@@ -213,13 +122,12 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
     const jacobian = new Float64Array(pointCount * freeCount);
     let chiSquare = 0;
     for (let point = 0; point < pointCount; point += 1) {
-      const inverse = 1 / (sigma[point] as number);
-      const residual = ((y[point] as number) - (model[point] as number)) * inverse;
+      const inverse = 1 / sigma[point];
+      const residual = (y[point] - model[point]) * inverse;
       residuals[point] = residual;
       chiSquare += residual * residual;
       for (let at = 0; at < freeCount; at += 1)
-        jacobian[point * freeCount + at] =
-          (fullJacobian[point * parameterCount + (free[at] as number)] as number) * inverse;
+        jacobian[point * freeCount + at] = fullJacobian[point * parameterCount + free[at]] * inverse;
     }
     return { values: Float64Array.from(freeValues), residuals, jacobian, chiSquare };
   };
@@ -240,11 +148,10 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
       : `It had not converged after ${maxIterations} iterations.`;
 
   const blocked = (gradient: Float64Array, at: number) =>
-    ((state.values[at] as number) <= (lower[at] as number) && (gradient[at] as number) <= 0) ||
-    ((state.values[at] as number) >= (upper[at] as number) && (gradient[at] as number) >= 0);
+    (state.values[at] <= lower[at] && gradient[at] <= 0) || (state.values[at] >= upper[at] && gradient[at] >= 0);
 
   while (status === 'max-iterations') {
-    const { matrix, gradient } = normalMatrix(state, freeCount);
+    const { matrix, gradient } = normalEquations(state.jacobian, state.residuals, freeCount);
     const open = Array.from({ length: freeCount }, (_, at) => at).filter((at) => !blocked(gradient, at));
     if (open.length === 0) {
       status = 'converged';
@@ -255,7 +162,7 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
     const perPoint = degreesOfFreedom > 0 ? state.chiSquare / degreesOfFreedom : 1;
     const variance = uncertaintyScaling === 'none' ? Math.max(1, perPoint) : perPoint;
     if (inverse !== null) {
-      const pull = Matrix.columnVector(open.map((at) => gradient[at] as number));
+      const pull = Matrix.columnVector(open.map((at) => gradient[at]));
       const decrement = pull.transpose().mmul(inverse).mmul(pull).get(0, 0);
       if (decrement <= variance * LEAST_SQUARES_DEFAULTS.stepOverUncertainty ** 2) {
         status = 'converged';
@@ -273,13 +180,13 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
 
     for (let at = 0; at < freeCount; at += 1) {
       const length = Math.sqrt(matrix.get(at, at));
-      scales[at] = Math.max(scales[at] as number, length);
+      scales[at] = Math.max(scales[at], length);
       if (scales[at] === 0) scales[at] = 1;
     }
     const plan = planStep(
       matrix.selection(open, open),
-      open.map((at) => gradient[at] as number),
-      open.map((at) => scales[at] as number),
+      open.map((at) => gradient[at]),
+      open.map((at) => scales[at]),
       (radius ??= LEAST_SQUARES_DEFAULTS.firstRadius * scaledLength(open)),
     );
     const next = takeStep(state, open, plan.damping);
@@ -288,8 +195,7 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
     else if (gain <= 0.25) radius = (next === null ? 0.25 : 0.5) * Math.min(radius, plan.length);
     if (next !== null) {
       const moved = next.values.some(
-        (value, at) =>
-          Math.abs(value - (state.values[at] as number)) > LEAST_SQUARES_DEFAULTS.relativeStep * Math.abs(value),
+        (value, at) => Math.abs(value - state.values[at]) > LEAST_SQUARES_DEFAULTS.relativeStep * Math.abs(value),
       );
       state = next;
       if (!moved) {
@@ -304,24 +210,24 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
   return report();
 
   function scaledLength(open: readonly number[]): number {
-    return Math.hypot(...open.map((at) => (state.values[at] as number) * (scales[at] as number))) || 1;
+    return Math.hypot(...open.map((at) => state.values[at] * scales[at])) || 1;
   }
 
   /** One damped step of the open parameters, scaled; null when it does not lower chi-square. */
   function takeStep(from: State, open: readonly number[], withDamping: number): State | null {
-    const scaleOf = (at: number) => scales[at] as number;
-    const start = open.map((at) => (from.values[at] as number) * scaleOf(at));
-    const minValues = open.map((at) => (lower[at] as number) * scaleOf(at));
-    const maxValues = open.map((at) => (upper[at] as number) * scaleOf(at));
+    const scaleOf = (at: number) => scales[at];
+    const start = open.map((at) => from.values[at] * scaleOf(at));
+    const minValues = open.map((at) => lower[at] * scaleOf(at));
+    const maxValues = open.map((at) => upper[at] * scaleOf(at));
     let trial: { scaled: number[]; state: State } | null = null;
     const stateAt = (scaled: number[]): State => {
       if (scaled.every((value, index) => value === start[index])) return from;
       if (trial === null || !trial.scaled.every((value, index) => value === scaled[index])) {
         const values = Float64Array.from(from.values);
         open.forEach((at, index) => {
-          const value = scaled[index] as number;
-          if (value <= (minValues[index] as number)) values[at] = lower[at] as number;
-          else if (value >= (maxValues[index] as number)) values[at] = upper[at] as number;
+          const value = scaled[index];
+          if (value <= minValues[index]) values[at] = lower[at];
+          else if (value >= maxValues[index]) values[at] = upper[at];
           else values[at] = value / scaleOf(at);
         });
         trial = { scaled: scaled.slice(), state: evaluateAt(values) };
@@ -333,7 +239,7 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
       { x: points, y: new Float64Array(pointCount) },
       (scaled) => {
         const { residuals } = stateAt(scaled);
-        return (point) => -(residuals[point] as number);
+        return (point) => -residuals[point];
       },
       {
         initialValues: start,
@@ -344,7 +250,7 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
         errorTolerance: 0,
         jacobianFunction: (scaled) => {
           const { jacobian } = stateAt(scaled);
-          return (point) => open.map((at) => (jacobian[point * freeCount + at] as number) / scaleOf(at));
+          return (point) => open.map((at) => jacobian[point * freeCount + at] / scaleOf(at));
         },
       },
     );
@@ -363,7 +269,9 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
     const open = free.flatMap((index, at) => (atBound[index] === true ? [] : [at]));
     let covariance: number[][] | null = null;
     if (status !== 'non-finite' && open.length > 0) {
-      const inverse = invertScaled(normalMatrix(state, freeCount).matrix.selection(open, open));
+      const inverse = invertScaled(
+        normalEquations(state.jacobian, state.residuals, freeCount).matrix.selection(open, open),
+      );
       const scale = uncertaintyScaling === 'none' ? 1 : reducedChiSquare;
       if (inverse === null) warnings.push('The data do not determine every free parameter.');
       else if (scale === null) warnings.push('Without degrees of freedom the scatter gives no uncertainty.');
@@ -371,14 +279,13 @@ export function leastSquares(problem: LeastSquaresProblem, options: LeastSquares
         covariance = parameters.map(() => parameters.map(() => 0));
         open.forEach((at, row) =>
           open.forEach((other, column) => {
-            ((covariance as number[][])[free[at] as number] as number[])[free[other] as number] =
-              inverse.get(row, column) * scale;
+            ((covariance as number[][])[free[at]] as number[])[free[other]] = inverse.get(row, column) * scale;
           }),
         );
       }
     }
     const fitted = parameters.map(({ name, unit, initialValue, fixed = false }, index): FittedParameter => {
-      const value = values[index] as number;
+      const value = values[index];
       const variance = fixed || atBound[index] === true ? undefined : covariance?.[index]?.[index];
       if (atBound[index] === true) warnings.push(`${name} lies at its bound.`);
       return {

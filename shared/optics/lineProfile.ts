@@ -27,8 +27,8 @@ function sampleBilinear({ widthPx, heightPx, data }: CountPlane, x: number, y: n
   const fx = x - column;
   const fy = y - row;
   const at = row * widthPx + column;
-  const upper = (data[at] as number) * (1 - fx) + (data[at + right] as number) * fx;
-  const lower = (data[at + below] as number) * (1 - fx) + (data[at + below + right] as number) * fx;
+  const upper = data[at] * (1 - fx) + data[at + right] * fx;
+  const lower = data[at + below] * (1 - fx) + data[at + below + right] * fx;
   return upper * (1 - fy) + lower * fy;
 }
 

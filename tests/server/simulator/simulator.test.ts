@@ -36,6 +36,9 @@ const mean = (values: ArrayLike<number>) =>
     0,
   ) / values.length;
 
+const same = (one: Uint16Array, other: Uint16Array) =>
+  Buffer.compare(Buffer.from(one.buffer), Buffer.from(other.buffer)) === 0;
+
 describe('the two ways to the same light', () => {
   // The simulator integrates the diffraction integral by quadrature with a Bessel function of its own; the models of
   // measuring use Lommel's series. They share no code.
@@ -78,9 +81,9 @@ describe('simulatedRandom', () => {
 describe('simulatePinhole', () => {
   test('the same seed gives the same frame, another seed the same pattern with other noise', () => {
     const first = simulatePinhole(bench);
-    expect(simulatePinhole(bench).light).toEqual(first.light);
+    expect(same(simulatePinhole(bench).light, first.light)).toBe(true);
     const other = simulatePinhole({ ...bench, seed: 2 });
-    expect(other.light).not.toEqual(first.light);
+    expect(same(other.light, first.light)).toBe(false);
     expect(other.truth.peakCounts / first.truth.peakCounts).toBeCloseTo(1, 1);
   });
 
@@ -176,9 +179,9 @@ describe('simulateDark', () => {
     const hot = (frame: Uint16Array) => new Set(Array.from(frame.keys()).filter((at) => frame[at] > 400));
     expect(hot(first).size).toBeGreaterThan(20);
     expect([...hot(first)].filter((at) => !hot(second).has(at)).length).toBeLessThanOrEqual(3);
-    expect(first).not.toEqual(second);
+    expect(same(first, second)).toBe(false);
     // The same camera made again is the same camera.
-    expect(simulateDark({ sensor: { ...faulty }, seed: 1 })).toEqual(first);
+    expect(same(simulateDark({ sensor: { ...faulty }, seed: 1 }), first)).toBe(true);
   });
 
   test('the mean is black and dark signal', () => {

@@ -67,9 +67,9 @@ describe('fitLineBothErrors', () => {
     const fit = fitLineBothErrors(
       x.map((value, index) => ({
         x: value,
-        y: y[index] as number,
-        xUncertainty: 1 / Math.sqrt(xWeight[index] as number),
-        yUncertainty: 1 / Math.sqrt(yWeight[index] as number),
+        y: y[index],
+        xUncertainty: 1 / Math.sqrt(xWeight[index]),
+        yUncertainty: 1 / Math.sqrt(yWeight[index]),
       })),
     );
     expect(fit.status).toBe('converged');

@@ -83,7 +83,7 @@ const evaluateWith =
   (x: readonly number[], model: Model, count: number) =>
   (values: Float64Array, out: Float64Array, jacobian: Float64Array | null) => {
     x.forEach((at, point) => {
-      const { value, derivatives } = model(at, (index) => values[index] as number);
+      const { value, derivatives } = model(at, (index) => values[index]);
       out[point] = value;
       if (jacobian !== null) derivatives.forEach((derivative, index) => (jacobian[point * count + index] = derivative));
     });
@@ -110,16 +110,14 @@ describe('NIST StRD nonlinear regression sets (certified values looked up; resid
     // residuals are at the level of the rounding of the data).
     const digits = name === 'Lanczos3' ? 1e-5 : 1e-7;
     const deviation = (value: number, certified: number) => Math.abs(value / certified - 1);
-    fit.parameters.forEach(({ value }, index) =>
-      expect(deviation(value, set.certified[index] as number)).toBeLessThan(digits),
-    );
+    fit.parameters.forEach(({ value }, index) => expect(deviation(value, set.certified[index])).toBeLessThan(digits));
     expect(deviation(fit.chiSquare, set.certifiedResidualSumOfSquares)).toBeLessThan(1e-9);
     expect(fit.uncertaintyScaling).toBe('reduced-chi-square');
     // Certified standard errors agree with the exact Jacobian's to 4 digits.
     const errors = set.certifiedStandardErrors ?? set.standardErrorsComputed ?? [];
     expect(errors).toHaveLength(values.length);
     fit.parameters.forEach(({ stdUncertainty }, index) =>
-      expect(deviation(stdUncertainty as number, errors[index] as number)).toBeLessThan(1e-4),
+      expect(deviation(stdUncertainty as number, errors[index])).toBeLessThan(1e-4),
     );
   });
 });
@@ -140,7 +138,7 @@ describe('leastSquares', () => {
     for (let trial = 0; trial < 1500; trial += 1) {
       const fit = leastSquares({
         parameters: lineParameters,
-        y: x.map((at, point) => 1 + 0.5 * at + (sigma[point] as number) * random.normal()),
+        y: x.map((at, point) => 1 + 0.5 * at + sigma[point] * random.normal()),
         yUncertainty: sigma,
         evaluate: evaluateWith(x, line, 2),
       });

@@ -19,7 +19,7 @@ test('sub-pixel positions on an oblique line are exact on a plane of even slope'
   const profile = lineProfile(ramp, { x0: 5.25, y0: 4.5, x1: 25.25, y1: 19.5, widthPx: 5 });
   expect(profile.distancePx).toHaveLength(26);
   profile.meanCounts.forEach((counts, index) => {
-    expect(counts).toBeCloseTo(100 + 10 * (profile.xPx[index] as number) + (profile.yPx[index] as number), 9);
+    expect(counts).toBeCloseTo(100 + 10 * profile.xPx[index] + profile.yPx[index], 9);
   });
 });
 
