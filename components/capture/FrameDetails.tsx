@@ -17,6 +17,7 @@ export interface FrameActions {
 /** What is known of a frame's file, and what can be done with it. */
 export function FrameDetails({ frame, canChange, busy, onLeaveOut, onKind }: FrameActions & { frame: CaptureFrame }) {
   const facts = [
+    frame.name,
     formatBytes(frame.byteSize),
     frame.format,
     frame.widthPx && frame.heightPx ? `${frame.widthPx} × ${frame.heightPx} px` : null,

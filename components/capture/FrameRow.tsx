@@ -13,6 +13,7 @@ import { frameColumns } from './frameColumns';
 import { FrameDetails, type FrameActions } from './FrameDetails';
 import { FrameThumbnail } from './FrameThumbnail';
 import { PeakSlot } from './PeakSlot';
+import { shortName } from './shortName';
 
 export interface FrameRowProps extends FrameActions {
   captureId: string;
@@ -90,7 +91,7 @@ export function FrameRow({ captureId, frame, thumbnail, ...actions }: FrameRowPr
           {desk ? (
             <>
               <Text tone="ink0" lines={1} style={{ flex: 1, minWidth: 0 }}>
-                {frame.name}
+                {shortName(frame.name, 21)}
               </Text>
               <Text align="right" style={{ width: frameColumns.exposure }}>
                 {frame.exposureMs === null ? '–' : formatQuantity(frame.exposureMs, 'ms', { significant: 2 })}
@@ -105,7 +106,7 @@ export function FrameRow({ captureId, frame, thumbnail, ...actions }: FrameRowPr
           ) : (
             <View style={{ flex: 1, minWidth: 0, gap: 4 }}>
               <Text variant="small" tone="ink0" lines={1}>
-                {frame.name}
+                {shortName(frame.name, 30)}
               </Text>
               {health && frame.kind === 'light' ? <PeakSlot health={health} style={{ width: 104 }} /> : null}
             </View>

@@ -9,6 +9,7 @@ import { webProps } from '@/components/ui/webProps';
 import { sendingWords, type SendingFile } from './captureRows';
 import { FrameThumbnail } from './FrameThumbnail';
 import { KindSwitch } from './KindSwitch';
+import { shortName } from './shortName';
 
 export interface SendingRowProps {
   file: SendingFile;
@@ -50,7 +51,7 @@ export function SendingRow({ file, onKind, onCancel, onRetry, onDismiss }: Sendi
             lines={1}
             style={{ flex: 1, minWidth: 0 }}
           >
-            {file.name}
+            {shortName(file.name, desk ? 44 : 26)}
           </Text>
           <View style={{ minWidth: moving ? 120 : undefined, paddingRight: atRest ? 0 : 4 }}>
             <Text variant="small" tone={moving ? 'ink1' : 'ink2'} align="right">

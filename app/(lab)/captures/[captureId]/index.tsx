@@ -22,6 +22,7 @@ import { MeanSoFar } from '@/components/capture/MeanSoFar';
 import { MeasureLine } from '@/components/capture/MeasureLine';
 import { newestMeasured } from '@/components/capture/newestMeasured';
 import { SendingRow } from '@/components/capture/SendingRow';
+import { shortName } from '@/components/capture/shortName';
 import { SizesAsTheyArrive } from '@/components/capture/SizesAsTheyArrive';
 import { asEntered } from '@/components/measurement/asEntered';
 import { Awaited } from '@/components/ui/Awaited';
@@ -186,7 +187,7 @@ function Capture({ capture }: { capture: CaptureDetail }) {
 function newestSide(capture: CaptureDetail) {
   const frame = newestMeasured(capture.frames);
   return {
-    title: frame ? `Newest: ${frame.name}` : 'Newest size',
+    title: frame ? `Newest: ${shortName(frame.name, 20)}` : 'Newest size',
     note: frame?.measurement?.finishedAt ? formatTime(frame.measurement.finishedAt) : undefined,
     width: 420,
     content: frame ? (
