@@ -20,7 +20,6 @@ import { useToday } from '@/hooks/queries/today';
 import { useRole } from '@/hooks/session/SessionProvider';
 import { BENCH } from '@/shared/contracts/roles';
 import type { Today } from '@/shared/contracts/today';
-import { formatDate } from '@/shared/units/format';
 
 export default function TodayScreen() {
   const role = useRole();
@@ -87,10 +86,11 @@ function StaffToday() {
   return (
     <Screen
       title="Today"
-      subtitle={now}
+      headless
       {...light}
       list={{
-        title: 'What waits',
+        title: 'Today',
+        note: now,
         width: 392,
         content: (
           <Awaited result={today} what="what waits">
@@ -171,7 +171,7 @@ function NextOfLot({ next, mayCapture }: { next: NonNullable<Today['next']>; may
         next={next}
         apertures={lot.data?.apertures ?? []}
         clientName={lot.data?.clientName ?? null}
-        due={lot.data ? dueWords(lot.data.dueOn === null ? null : formatDate(lot.data.dueOn)) : null}
+        due={lot.data ? dueWords(lot.data.dueOn) : null}
         mayCapture={mayCapture}
       />
       {desk && lot.data ? (

@@ -7,6 +7,7 @@ import { useNotice } from '@/components/ui/NoticeProvider';
 import { Plate } from '@/components/ui/Plate';
 import { Row } from '@/components/ui/Row';
 import { roleWords } from '@/components/ui/roleWords';
+import { shortDate } from '@/components/ui/shortDate';
 import { Screen } from '@/components/ui/Screen';
 import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
@@ -16,7 +17,6 @@ import { useClients } from '@/hooks/queries/clients';
 import { useInvitations, useInvite, usePeople, useUpdatePerson, useWithdrawInvitation } from '@/hooks/queries/people';
 import { useRole, useSignedIn } from '@/hooks/session/SessionProvider';
 import type { Role } from '@/shared/contracts/roles';
-import { formatDate } from '@/shared/units/format';
 
 export default function PeopleScreen() {
   const { desk } = useLook();
@@ -124,7 +124,7 @@ function Waiting({ clientName }: { clientName: (clientId: string | null) => stri
                 key={one.id}
                 icon="mail"
                 title={one.email}
-                subtitle={`${clientName(one.clientId) ?? roleWords[one.role]}, until ${formatDate(one.expiresAt)}`}
+                subtitle={`${clientName(one.clientId) ?? roleWords[one.role]}, until ${shortDate(one.expiresAt)}`}
                 trailing={
                   <Button
                     label="Withdraw"

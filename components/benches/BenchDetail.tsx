@@ -1,4 +1,5 @@
 import { View } from 'react-native';
+import { ActionFoot } from '@/components/ui/ActionFoot';
 import { Awaited, type AwaitedResult } from '@/components/ui/Awaited';
 import { Button } from '@/components/ui/Button';
 import { Icon } from '@/components/ui/Icon';
@@ -35,12 +36,8 @@ export function BenchDetail({ detail, benchId, list, mayEdit, here, onChoose }: 
       benchLabel={bench?.name ?? null}
       foot={
         mayEdit ? (
-          <Button
-            label="Revise this bench"
-            icon="note"
-            kind="primary"
-            fullBleed={!desk}
-            href={`/bench/${benchId}/revise`}
+          <ActionFoot
+            primary={<Button label="Revise this bench" icon="note" kind="primary" href={`/bench/${benchId}/revise`} />}
           />
         ) : undefined
       }
@@ -48,7 +45,6 @@ export function BenchDetail({ detail, benchId, list, mayEdit, here, onChoose }: 
         bench
           ? {
               title: 'Revisions',
-              note: 'A measurement keeps the one it used',
               width: 380,
               content: <RevisionList revisions={bench.revisions} />,
             }

@@ -11,6 +11,11 @@ import { enteredWithUncertainty, illuminationWords, plainQuantity } from './benc
 export function RevisionList({ revisions }: { revisions: readonly BenchRevision[] }) {
   return (
     <View style={{ gap: space.hair }}>
+      <Plate>
+        <Text variant="small" tone="ink2">
+          A measurement keeps the revision that it used.
+        </Text>
+      </Plate>
       {revisions.map((revision, i) => (
         <Plate key={revision.id} surface={i === 0 ? 'lift' : 'plate'}>
           <View style={{ flexDirection: 'row', justifyContent: 'space-between', gap: space.m, marginBottom: space.xs }}>

@@ -15,9 +15,11 @@ export interface DemoSignInsProps {
 export function DemoSignIns({ signIns, inbox, onChoose }: DemoSignInsProps) {
   return (
     <View role="group" aria-label="Demo laboratory" style={{ marginTop: space.xl, gap: space.hair }}>
-      <Text variant="small" tone="ink2" style={{ paddingBottom: space.s }}>
-        Demo laboratory with invented people and frames. Sign in as
-      </Text>
+      {signIns.length > 0 ? (
+        <Text variant="small" tone="ink2" style={{ paddingBottom: space.s }}>
+          Demo laboratory, all invented. Sign in as
+        </Text>
+      ) : null}
       {signIns.map((person) => (
         <Row
           key={person.email}

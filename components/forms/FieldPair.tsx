@@ -9,8 +9,10 @@ export function FieldPair({ children }: { children: ReactNode }) {
   if (layout === 'phone') return <>{children}</>;
   return (
     <View style={{ flexDirection: 'row', gap: space.hair, alignItems: 'flex-start' }}>
-      {Children.map(children, (child) => (
-        <View style={{ flex: 1, minWidth: 0 }}>{child}</View>
+      {Children.toArray(children).map((child, i) => (
+        <View key={i} style={{ flex: 1, minWidth: 0 }}>
+          {child}
+        </View>
       ))}
     </View>
   );

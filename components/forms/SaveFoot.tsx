@@ -1,8 +1,6 @@
 import type { Href } from 'expo-router';
-import { View } from 'react-native';
 import { Button } from '@/components/ui/Button';
-import { space } from '@/components/ui/tokens';
-import { useLook } from '@/components/ui/useLook';
+import { ActionFoot } from '@/components/ui/ActionFoot';
 
 export interface SaveFootProps {
   /** “Save the laser”. */
@@ -14,20 +12,10 @@ export interface SaveFootProps {
 
 /** At the foot of a form: leave, and the one button that goes on. */
 export function SaveFoot({ label, busy, onSave, cancel }: SaveFootProps) {
-  const { desk } = useLook();
   return (
-    <View style={{ flexDirection: 'row', gap: space.hair }}>
-      <Button label="Back" icon="back" fullBleed={!desk} href={cancel} style={{ minHeight: desk ? 56 : 68 }} />
-      <Button
-        label={label}
-        kind="primary"
-        fullBleed={!desk}
-        busy={busy}
-        onPress={onSave}
-        trailing="tick"
-        style={{ flex: 1, minHeight: desk ? 56 : 68 }}
-        testID="save"
-      />
-    </View>
+    <ActionFoot
+      secondary={<Button label="Back" icon="back" href={cancel} />}
+      primary={<Button label={label} kind="primary" busy={busy} onPress={onSave} trailing="tick" testID="save" />}
+    />
   );
 }

@@ -66,7 +66,7 @@ export function ApertureTable({ lotId, apertures, selectedId }: ApertureTablePro
       ) {
         return desk ? null : (
           <Text variant="small" lines={1}>
-            {reading.words}
+            {reading.words.replace(/^(refused|failed): /, '')}
           </Text>
         );
       }

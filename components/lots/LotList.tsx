@@ -5,7 +5,6 @@ import { Row } from '@/components/ui/Row';
 import { SearchField } from '@/components/ui/SearchField';
 import { space } from '@/components/ui/tokens';
 import type { Lot } from '@/shared/contracts/lots';
-import { formatDate } from '@/shared/units/format';
 import { dueWords } from './apertureWords';
 import { LotStrip } from './LotStrip';
 
@@ -39,7 +38,7 @@ export function LotList({ lots, selectedId, narrow }: LotListProps) {
               ? lot.clientName
               : [
                   `${lot.apertureCount} ${lot.apertureCount === 1 ? 'aperture' : 'apertures'}`,
-                  dueWords(lot.dueOn === null ? null : formatDate(lot.dueOn)),
+                  dueWords(lot.dueOn),
                 ].join(', ')
           }
           href={`/lots/${lot.id}`}

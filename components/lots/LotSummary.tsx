@@ -15,8 +15,8 @@ export function LotSummary({ apertures }: { apertures: readonly Aperture[] }) {
   const readings = apertures.map((aperture) => ({ aperture, reading: readAperture(aperture) }));
   const count = (...verdicts: Verdict[]) => readings.filter(({ reading }) => verdicts.includes(reading.verdict)).length;
   const counts = [
-    { verdict: 'conforms' as const, count: count('conforms'), words: 'within limits' },
-    { verdict: 'undecided' as const, count: count('undecided'), words: 'at a limit' },
+    { verdict: 'conforms' as const, count: count('conforms'), words: desk ? 'within limits' : 'within' },
+    { verdict: 'undecided' as const, count: count('undecided'), words: desk ? 'at a limit' : 'at limit' },
     { verdict: 'above' as const, count: count('above', 'below'), words: 'outside' },
     { verdict: 'refused' as const, count: count('refused'), words: 'refused' },
     { verdict: 'open' as const, count: count('open'), words: 'open' },
@@ -42,7 +42,7 @@ export function LotSummary({ apertures }: { apertures: readonly Aperture[] }) {
         style={{
           flexDirection: 'row',
           flexWrap: 'wrap',
-          gap: desk ? 26 : space.s,
+          gap: desk ? 22 : space.xs,
           rowGap: space.s,
           paddingHorizontal: desk ? 20 : space.l,
           paddingTop: 12,
@@ -53,7 +53,7 @@ export function LotSummary({ apertures }: { apertures: readonly Aperture[] }) {
         {counts.map((one) => (
           <View
             key={one.verdict}
-            style={desk ? { flexDirection: 'row', alignItems: 'center', gap: 9 } : { flexGrow: 1, minWidth: 64 }}
+            style={desk ? { flexDirection: 'row', alignItems: 'center', gap: 9 } : { flex: 1, minWidth: 60 }}
           >
             <View style={{ flexDirection: 'row', alignItems: 'center', gap: 8 }}>
               <VerdictGlyph verdict={one.verdict} />

@@ -1,3 +1,4 @@
+import { shortDate } from '@/components/ui/shortDate';
 import type { ApertureKind } from '@/shared/contracts/lots';
 import { formatMeasuredText, formatNumber, THIN_SPACE } from '@/shared/units/format';
 
@@ -40,7 +41,7 @@ export function sizeSentence(
     : `${serial}, ${formatMeasuredText(sizeUm, expandedUncertaintyUm, 'µm')}, ${words}`;
 }
 
-/** “due 6 March 2026”, “no due date”. */
-export function dueWords(dueText: string | null): string {
-  return dueText === null ? 'no due date' : `due ${dueText}`;
+/** “due 6 March”, “no due date”. */
+export function dueWords(dueOn: string | null): string {
+  return dueOn === null ? 'no due date' : `due ${shortDate(dueOn)}`;
 }

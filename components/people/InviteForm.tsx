@@ -53,7 +53,8 @@ export function InviteForm({ clients, onInvite, onDone }: InviteFormProps) {
         control={form.control}
         name="role"
         label="Role"
-        choices={roles.map((one) => ({ value: one, label: `${roleWords[one]}: ${roleMeaning[one]}` }))}
+        hint={`${roleMeaning[role].charAt(0).toUpperCase()}${roleMeaning[role].slice(1)}.`}
+        choices={roles.map((one) => ({ value: one, label: roleWords[one] }))}
       />
       {role === 'client' ? (
         <FormChoice

@@ -50,7 +50,8 @@ export function PersonRow({ name, email, role, active, clientName, self, busy, p
               <ChoiceField
                 label="Role"
                 value={role}
-                choices={STAFF.map((one) => ({ value: one, label: `${roleWords[one]}: ${roleMeaning[one]}` }))}
+                choices={STAFF.map((one) => ({ value: one, label: roleWords[one] }))}
+                hint={`${roleMeaning[role].charAt(0).toUpperCase()}${roleMeaning[role].slice(1)}.`}
                 onChange={(next) => onChange({ role: next })}
                 disabled={busy}
               />

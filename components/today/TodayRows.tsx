@@ -7,7 +7,7 @@ import { StageGlyph } from '@/components/ui/StageGlyph';
 import { Text } from '@/components/ui/Text';
 import { space } from '@/components/ui/tokens';
 import type { Today } from '@/shared/contracts/today';
-import { formatDate, formatMeasured, formatTime } from '@/shared/units/format';
+import { formatMeasured, formatTime } from '@/shared/units/format';
 
 /** Refusals, what runs, and lots that are not whole: one row each, those that need a person first. */
 export function WaitingRows({ today }: { today: Today }) {
@@ -51,7 +51,7 @@ export function OpenLotRows({ lots }: { lots: Today['lots'] }) {
           icon="lots"
           title={lot.number}
           aside={lot.clientName}
-          subtitle={`${lot.apertureCount} ${lot.apertureCount === 1 ? 'piece' : 'pieces'}, ${dueWords(lot.dueOn === null ? null : formatDate(lot.dueOn))}`}
+          subtitle={`${lot.apertureCount} ${lot.apertureCount === 1 ? 'piece' : 'pieces'}, ${dueWords(lot.dueOn)}`}
           href={`/lots/${lot.id}`}
           trailing={
             <LotStrip

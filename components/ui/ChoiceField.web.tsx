@@ -1,5 +1,6 @@
 import { useId, useState } from 'react';
 import type { ChoiceFieldProps } from './choice';
+import { View } from 'react-native';
 import { FieldFrame } from './FieldFrame';
 import { Icon } from './Icon';
 import { fontFamily } from './tokens';
@@ -23,14 +24,7 @@ export function ChoiceField<V extends string>({
   const [focused, setFocused] = useState(false);
   const chosen = choices.some((choice) => choice.value === value);
   return (
-    <FieldFrame
-      id={id}
-      label={label}
-      error={error}
-      hint={hint}
-      focused={focused}
-      trailing={<Icon name="down" size={20} />}
-    >
+    <FieldFrame id={id} label={label} error={error} hint={hint} focused={focused} trailing={<ArrowOverRoom />}>
       <select
         data-testid={testID}
         aria-label={label}
@@ -49,11 +43,13 @@ export function ChoiceField<V extends string>({
         }}
         style={{
           // The control covers the whole plate, so that a touch anywhere on it opens the list.
-          flex: 1,
-          minWidth: 0,
-          margin: '-34px -42px -12px -14px',
-          padding: '34px 42px 12px 14px',
+          position: 'absolute',
+          left: -14,
+          right: -14,
+          top: -25,
+          width: 'calc(100% + 28px)',
           height: 60,
+          padding: '25px 42px 8px 14px',
           boxSizing: 'border-box',
           appearance: 'none',
           border: 0,
@@ -64,7 +60,6 @@ export function ChoiceField<V extends string>({
           fontSize: 17,
           lineHeight: '22px',
           textOverflow: 'ellipsis',
-          position: 'relative',
           zIndex: 1,
         }}
       >
@@ -84,5 +79,14 @@ export function ChoiceField<V extends string>({
         ))}
       </select>
     </FieldFrame>
+  );
+}
+
+/** The chevron at the right end, and the height of a line for the list that lies over the plate. */
+function ArrowOverRoom() {
+  return (
+    <View style={{ flex: 1, minHeight: 24, alignItems: 'flex-end', justifyContent: 'center' }}>
+      <Icon name="down" size={20} />
+    </View>
   );
 }

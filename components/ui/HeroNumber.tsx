@@ -29,6 +29,10 @@ export function HeroNumber({ value, uncertainty, unit, note, maxSize }: HeroNumb
   const cap = maxSize ?? (layout === 'tablet' ? 124 : desk ? 108 : 97);
   const room = width === 0 ? cap * 4 : beside ? width * 0.62 : width;
   const size = Math.min(cap, Math.floor(room / Math.max(2.4, widthEm(value))));
+  const second = Math.max(18, Math.min(40, Math.round(size * 0.35)));
+  const besideStyle = beside
+    ? { fontSize: second, lineHeight: Math.round(second * 1.12), letterSpacing: -0.025 * second }
+    : null;
   return (
     <View
       onLayout={(event) => setWidth(event.nativeEvent.layout.width)}
@@ -53,7 +57,7 @@ export function HeroNumber({ value, uncertainty, unit, note, maxSize }: HeroNumb
             : { flexDirection: 'row', alignItems: 'flex-end', justifyContent: 'space-between', gap: space.m }
         }
       >
-        <Text variant="large" lines={1}>
+        <Text variant="large" lines={1} style={besideStyle}>
           {uncertainty === undefined ? unit : `±\u2009${uncertainty}\u2009${unit}`}
         </Text>
         {typeof note === 'string' ? (

@@ -37,12 +37,14 @@ export function Panel({
   children,
 }: PanelProps) {
   const { colours } = useLook();
-  const content = (
-    <View
-      style={[{ gap: space.hair }, measure ? { maxWidth: measure } : null, scroll ? null : { flex: 1, minHeight: 0 }]}
-    >
-      {children}
+  const column = <View style={[{ gap: space.hair }, scroll ? null : { flex: 1, minHeight: 0 }]}>{children}</View>;
+  const content = measure ? (
+    <View style={{ flexDirection: 'row', gap: space.hair }}>
+      <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: measure, maxWidth: measure }}>{column}</View>
+      <View style={{ flexGrow: 1, backgroundColor: colours.plate, borderRadius: radius.plate }} />
     </View>
+  ) : (
+    column
   );
   return (
     <View
@@ -71,7 +73,7 @@ export function Panel({
             <Text
               tone="ink2"
               lines={1}
-              style={{ flexShrink: 1, marginLeft: back === undefined && !action ? 'auto' : 0 }}
+              style={{ flexShrink: 50, marginLeft: back === undefined && !action ? 'auto' : 0 }}
             >
               {note}
             </Text>

@@ -2,7 +2,6 @@ import besselj1 from '@stdlib/math-base-special-besselj1';
 import { useId, useMemo, useState } from 'react';
 import { View, type StyleProp, type ViewStyle } from 'react-native';
 import Svg, { Defs, Path, RadialGradient, Rect, Stop, Text as SvgText } from 'react-native-svg';
-import { ownColourMap } from '@/shared/optics/ownColour';
 import { fontFamily } from './tokens';
 import { useLook } from './useLook';
 
@@ -20,6 +19,8 @@ function toneAt(q: number): number {
   return Math.log(1 + (light * peak + 0.8) / floor) / Math.log(1 + peak / floor);
 }
 
+const channels = (hex: string) => [1, 3, 5].map((at) => parseInt(hex.slice(at, at + 2), 16));
+
 export interface PatternPictureProps {
   /** px from the top to the rule on which the rings fall. */
   frameHeight: number;
@@ -35,12 +36,14 @@ export function PatternPicture({ frameHeight, footHeight, rings, style }: Patter
   const [width, setWidth] = useState(0);
   const id = `pattern${useId().replace(/\W/g, '')}`;
   const gradient = useMemo(() => {
-    const map = ownColourMap(null, theme);
+    const ground = channels(theme === 'dark' ? colours.gap : colours.lift);
+    const light = channels(theme === 'dark' ? colours.ink1 : colours.ink0);
     return Array.from({ length: stops + 1 }, (_, i) => {
-      const at = Math.min(255, Math.max(0, Math.round(toneAt((i / stops) * reach) * 255))) * 3;
-      return { offset: i / stops, colour: `rgb(${map[at]},${map[at + 1]},${map[at + 2]})` };
+      const tone = toneAt((i / stops) * reach);
+      const mixed = ground.map((from, k) => Math.round(from + ((light[k] ?? 0) - from) * tone));
+      return { offset: i / stops, colour: `rgb(${mixed.join(',')})` };
     });
-  }, [theme]);
+  }, [theme, colours]);
   const margin = layout === 'phone' ? 16 : 48;
   const unit = (width - margin - 24) / ((darkRings[rings - 1] ?? 5.2) + 0.1);
   const centreX = margin;

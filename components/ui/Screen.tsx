@@ -41,6 +41,8 @@ export interface ScreenProps {
   benchLabel?: string | null;
   /** False: children scroll themselves and fill the height. */
   scroll?: boolean;
+  /** The detail panel of a desk has no head: its name stands over the list. */
+  headless?: boolean;
   /** Detail panel's widest content on a desk, px, for forms and text. */
   measure?: number;
   children: ReactNode;
@@ -59,6 +61,7 @@ export function Screen({
   benchLabel = null,
   scroll = true,
   measure,
+  headless,
   children,
 }: ScreenProps) {
   const { colours, desk, layout } = useLook();
@@ -78,13 +81,13 @@ export function Screen({
             action={list.action}
             foot={list.foot}
             width={list.width ?? 300}
-            level={2}
+            level={headless ? 1 : 2}
           >
             {list.content}
           </Panel>
         ) : null}
         <Panel
-          title={title}
+          title={headless ? undefined : title}
           note={subtitle}
           back={back}
           action={action}

@@ -31,7 +31,7 @@ export interface TableProps<R> {
   rowHref?: (row: R) => Href;
   onRowPress?: (row: R) => void;
   selectedKey?: string | null;
-  /** Rows that need a person are lifted. */
+  /** Rows that need a person are lifted, and stand first until the table is sorted. */
   isFirst?: (row: R) => boolean;
   sort?: { key: string; descending: boolean };
 }
@@ -53,8 +53,9 @@ export function Table<R>({
   const [sort, setSort] = useState(first ?? null);
   const ordered = useMemo(() => {
     const by = sort ? columns.find((column) => column.key === sort.key)?.sortBy : undefined;
-    return by && sort ? sortedBy(rows, by, sort.descending) : rows;
-  }, [rows, columns, sort]);
+    if (by && sort) return sortedBy(rows, by, sort.descending);
+    return isFirst ? [...rows.filter(isFirst), ...rows.filter((row) => !isFirst(row))] : rows;
+  }, [rows, columns, sort, isFirst]);
   const cellStyle = (column: Column<R>) => [
     column.width ? { width: column.width } : { flex: 1, minWidth: 0 },
     {

@@ -17,7 +17,6 @@ import { useChosenBench } from '@/hooks/queries/chosenBench';
 import { useLot, useLots } from '@/hooks/queries/lots';
 import { useRole } from '@/hooks/session/SessionProvider';
 import { BENCH, STAFF } from '@/shared/contracts/roles';
-import { formatDate } from '@/shared/units/format';
 
 export default function LotScreen() {
   const { lotId, aperture: apertureId } = useLocalSearchParams<{ lotId: string; aperture?: string }>();
@@ -63,7 +62,11 @@ export default function LotScreen() {
     <Screen
       title={data ? `${data.number}, ${countOfKind(data.apertures.map((one) => one.kind))}` : 'Lot'}
       subtitle={
-        data ? `${data.clientName}, ${dueWords(data.dueOn === null ? null : formatDate(data.dueOn))}` : undefined
+        data
+          ? desk
+            ? `${data.clientName}, ${dueWords(data.dueOn)}`
+            : `${dueWords(data.dueOn)}, ${data.clientName}`
+          : undefined
       }
       back="/lots"
       action={actions}
