@@ -23,10 +23,10 @@ const testParts = [
     run: () => check('prettier', 'bin/prettier.cjs', ['--check', '.', '--log-level', 'warn']),
   },
   { name: 'types', title: 'Types', run: checkTypes },
-  { name: 'server', title: 'Server, shared and reference tests', run: () => jest('server', []) },
-  { name: 'client', title: 'Component tests', run: () => jest('client', []) },
+  { name: 'server', title: 'Server, shared and reference tests', run: () => jest('server', '--maxWorkers=2') },
+  { name: 'client', title: 'Component tests', run: () => jest('client', '--maxWorkers=2') },
   { name: 'export', title: 'Web export', run: exportWeb },
-  { name: 'e2e', title: 'Browser tests', run: () => jest('e2e', ['--runInBand']) },
+  { name: 'e2e', title: 'Browser tests', run: () => jest('e2e', '--runInBand') },
 ];
 
 /**
@@ -65,10 +65,10 @@ async function exportWeb() {
 /**
  * One project of jest. A test file that cannot even be loaded counts as a failed test.
  * @param {string} project
- * @param {string[]} args
+ * @param {string} workers
  * @returns {Promise<Count>}
  */
-async function jest(project, args) {
+async function jest(project, workers) {
   const folder = fs.mkdtempSync(path.join(os.tmpdir(), 'ringwright-report-'));
   const report = path.join(folder, 'report.json');
   try {
@@ -76,7 +76,7 @@ async function jest(project, args) {
       process.execPath,
       [
         path.join(checkout, 'node_modules', 'jest', 'bin', 'jest.js'),
-        ...['--selectProjects', project, '--ci', '--maxWorkers=2', '--json', `--outputFile=${report}`, ...args],
+        ...['--selectProjects', project, '--ci', workers, '--json', `--outputFile=${report}`],
       ],
       { cwd: checkout, output: 'inherit', env: { ...process.env, NODE_ENV: 'test' } },
     );
