@@ -48,8 +48,8 @@ export interface DiffractionTable {
 }
 
 /**
- * Irradiance of a circular hole against v = (2π/λ) a sin θ by direct quadrature of the diffraction integral in ρ, over the
- * field of the even, focused pattern's axis.
+ * Irradiance of a circular hole against v = (2π/λ) a sin θ by direct quadrature of the diffraction integral over the
+ * hole; 1 on the axis for an evenly lit hole far away.
  *
  * @param u (2π/λ) a² (1/z + 1/R)
  * @param taper (a/w)² for a Gaussian beam of 1/e² irradiance radius w at the hole; 0 for even light
