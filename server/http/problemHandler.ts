@@ -46,13 +46,17 @@ function toProblem(error: unknown): ProblemError {
   if (kind === 'encoding.unsupported' || kind === 'charset.unsupported') {
     return new ProblemError('unsupported-format', 'Send the body as UTF-8 without compression.', { cause: error });
   }
-  if (kind === 'request.aborted' || kind === 'request.size.invalid') {
-    return new ProblemError('invalid', 'The request broke off.', { cause: error });
-  }
   if (error instanceof URIError) return new ProblemError('not-found', 'There is no such address.', { cause: error });
+  if (isRequestError(error)) return new ProblemError('invalid', 'The request cannot be read.', { cause: error });
   return new ProblemError('internal', 'The service could not do this. Try again; if it stays, quote the number.', {
     cause: error,
   });
+}
+
+/** Errors of parsing a request carry the status that they stand for. */
+function isRequestError(error: unknown): boolean {
+  if (typeof error !== 'object' || error === null || !('status' in error)) return false;
+  return typeof error.status === 'number' && error.status >= 400 && error.status < 500;
 }
 
 /** The word that the body parser gives its errors. */
