@@ -39,11 +39,18 @@ export function BatchBar({ workingCount, keptCount, onCancelAll, onTryNow }: Bat
         paddingVertical: 4,
       }}
     >
-      <Text variant="small" tone="ink0" live style={{ flexGrow: 1, flexShrink: 1, flexBasis: 200 }}>
+      <Text
+        variant="small"
+        tone="ink0"
+        live
+        style={{ flexGrow: 1, flexShrink: 1, flexBasis: !desk && keptCount > 0 ? '90%' : 180 }}
+      >
         {words}
       </Text>
-      {keptCount > 0 ? <Button dense kind="quiet" label="Try now" onPress={onTryNow} /> : null}
-      <Button dense kind="quiet" label="Call off all" onPress={onCancelAll} />
+      <View style={{ flexDirection: 'row', gap: space.hair }}>
+        {keptCount > 0 ? <Button dense kind="quiet" label="Try now" onPress={onTryNow} /> : null}
+        <Button dense kind="quiet" label="Call off all" onPress={onCancelAll} />
+      </View>
     </View>
   );
 }

@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { View } from 'react-native';
 import { Button } from '@/components/ui/Button';
 import { IconButton } from '@/components/ui/IconButton';
@@ -19,7 +20,7 @@ export interface SendingRowProps {
   onDismiss: () => void;
 }
 
-const OPEN_KINDS: readonly SendingFile['state'][] = ['checking', 'hashing', 'hashed', 'ready', 'offline', 'failed'];
+const OPEN_KINDS: readonly SendingFile['state'][] = ['hashing', 'hashed', 'ready', 'offline', 'failed'];
 const AT_REST: readonly SendingFile['state'][] = ['unfit', 'failed', 'cancelled', 'known', 'stored'];
 
 /** A file on its way: how far it is, or why it does not go and what to send instead. */
@@ -30,6 +31,8 @@ export function SendingRow({ file, onKind, onCancel, onRetry, onDismiss }: Sendi
   const moving = file.state === 'sending' || file.state === 'hashing';
   const atRest = AT_REST.includes(file.state);
   const words = sendingWords(file);
+  const [open, setOpen] = useState(false);
+  const kindOpen = OPEN_KINDS.includes(file.state);
   return (
     <View
       role="listitem"
@@ -51,7 +54,7 @@ export function SendingRow({ file, onKind, onCancel, onRetry, onDismiss }: Sendi
             lines={1}
             style={{ flex: 1, minWidth: 0 }}
           >
-            {shortName(file.name, desk ? 44 : 26)}
+            {shortName(file.name, desk ? 44 : 17)}
           </Text>
           <View style={{ minWidth: moving ? 120 : undefined, paddingRight: atRest ? 0 : 4 }}>
             <Text variant="small" tone={moving ? 'ink1' : 'ink2'} align="right">
@@ -73,12 +76,12 @@ export function SendingRow({ file, onKind, onCancel, onRetry, onDismiss }: Sendi
             ) : null}
           </View>
         </View>
-        {file.problem ? (
+        {file.problem && file.state !== 'offline' ? (
           <Text variant="small" tone={stopped ? 'ink1' : 'ink2'}>
             {file.problem}
           </Text>
         ) : null}
-        {OPEN_KINDS.includes(file.state) && file.state !== 'failed' ? (
+        {open && kindOpen ? (
           <View style={{ alignSelf: 'flex-start' }}>
             <KindSwitch value={file.kind} onChange={onKind} />
           </View>
@@ -86,6 +89,14 @@ export function SendingRow({ file, onKind, onCancel, onRetry, onDismiss }: Sendi
       </View>
       {file.state === 'failed' || file.state === 'cancelled' ? (
         <Button dense label="Send again" onPress={onRetry} style={{ backgroundColor: colours.gap }} />
+      ) : null}
+      {kindOpen ? (
+        <IconButton
+          icon="more"
+          label={`${file.name} goes as a ${file.kind}. Change what it is`}
+          on={open}
+          onPress={() => setOpen(!open)}
+        />
       ) : null}
       <IconButton
         icon="close"

@@ -71,7 +71,7 @@ export function SlopeAnswer({ says, basis, benchName, benchUncertaintyMm }: Slop
         />
       )}
       <Text variant="small" tone="ink2">
-        Nominal sizes are taken as true. ± stands for k = 2, about 95 %.
+        Nominal sizes are taken as true. ± stands for k = 2, about 95 %.
       </Text>
     </Plate>
   );

@@ -31,7 +31,7 @@ export function RingTable({ rings, expandedUncertaintyUm, chosenOrder, onChooseR
   const places = placesOfUncertainty(expandedUncertaintyUm ?? 0.01);
   const cell = (text: string, flex: number, tone: 'ink0' | 'ink1' | 'ink2' = 'ink1', label = false) => (
     <View role={label ? 'columnheader' : 'cell'} style={{ flex, minWidth: 0 }}>
-      <Text variant={label ? 'label' : phone ? 'body' : 'small'} tone={tone} align="right" lines={1}>
+      <Text variant={label ? 'label' : 'small'} tone={tone} align="right" lines={1}>
         {text}
       </Text>
     </View>
@@ -57,11 +57,11 @@ export function RingTable({ rings, expandedUncertaintyUm, chosenOrder, onChooseR
       </View>
       <View role="table" aria-label={`${kind === 'dark' ? 'Dark' : 'Bright'} rings`}>
         <View role="row" style={[line, { paddingVertical: 6 }]}>
-          <View role="columnheader" style={{ width: phone ? 62 : 58 }}>
-            <Text variant="label">{kind === 'dark' ? 'Dark ring' : 'Bright ring'}</Text>
+          <View role="columnheader" style={{ width: 44 }}>
+            <Text variant="label">Ring</Text>
           </View>
-          {cell('Radius, mm', 1.2, 'ink2', true)}
-          {cell('±', 0.9, 'ink2', true)}
+          {cell('Radius, mm', 1.15, 'ink2', true)}
+          {cell('±', 1, 'ink2', true)}
           {cell('Model', 1.1, 'ink2', true)}
           {cell('Size, µm', 1.1, 'ink2', true)}
         </View>
@@ -83,13 +83,13 @@ export function RingTable({ rings, expandedUncertaintyUm, chosenOrder, onChooseR
                   }}
                 />
               ) : null}
-              <View role="cell" style={{ width: phone ? 62 : 58 }}>
-                <Text variant={phone ? 'body' : 'small'} tone={chosen ? 'ink0' : 'ink1'}>
+              <View role="cell" style={{ width: 44 }}>
+                <Text variant="small" tone={chosen ? 'ink0' : 'ink1'}>
                   {ring.order}
                 </Text>
               </View>
-              {cell(radius.value, 1.2)}
-              {cell(radius.uncertainty ?? '–', 0.9, 'ink2')}
+              {cell(radius.value, 1.15)}
+              {cell(radius.uncertainty ?? '–', 1, 'ink2')}
               {cell(formatNumber(ring.predictedMm, { places: decimals }), 1.1)}
               {cell(formatNumber(ring.sizeUm, { places }), 1.1, 'ink0')}
             </>

@@ -65,7 +65,43 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
   const stopped = measurement.state === 'refused' || measurement.state === 'failed';
   const running = measurement.state === 'waiting' || measurement.state === 'measuring';
   const wide = layout !== 'phone';
+  const tablet = wide && !desk;
   const nominal = `${asEntered(measurement.nominalSizeUm)} µm`;
+
+  const evidence =
+    wide && !running ? (
+      <Evidence measurement={measurement} measured={measured} chosenOrder={chosenOrder} onChooseRing={chooseRing} />
+    ) : null;
+  const answer = (
+    <>
+      {stopped ? (
+        <RefusedAnswer
+          state={measurement.state === 'refused' ? 'refused' : 'failed'}
+          reason={measurement.reason}
+          message={measurement.message}
+        />
+      ) : null}
+      {measured ? (
+        <Belief
+          measurement={measurement}
+          measured={measured}
+          ringTable={
+            wide ? null : (
+              <RingTable
+                rings={measured.rings}
+                expandedUncertaintyUm={measured.expandedUncertaintyUm}
+                chosenOrder={chosenOrder}
+                onChooseRing={chooseRing}
+              />
+            )
+          }
+        />
+      ) : null}
+      {running ? null : <UsedForThis measurement={measurement} />}
+      {measured ? <Exports measurement={measurement} /> : null}
+      <HistoryList measurement={measurement} />
+    </>
+  );
 
   const foot = again ? (
     <Again measurement={measurement} onClose={() => setAgain(false)} />
@@ -128,19 +164,8 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
           : undefined
       }
       evidence={
-        wide && !running
-          ? {
-              title: stopped ? 'The frame' : 'Why to believe it',
-              width: 452,
-              content: (
-                <Evidence
-                  measurement={measurement}
-                  measured={measured}
-                  chosenOrder={chosenOrder}
-                  onChooseRing={chooseRing}
-                />
-              ),
-            }
+        desk && evidence
+          ? { title: stopped ? 'The frame' : 'Why to believe it', width: 452, content: evidence }
           : undefined
       }
     >
@@ -148,36 +173,16 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
       {running ? (
         <RunningAnswer state={measurement.state === 'waiting' ? 'waiting' : 'measuring'} stage={measurement.stage} />
       ) : null}
-      {stopped ? (
-        <>
-          {wide ? null : <FramePicture measurement={measurement} />}
-          <RefusedAnswer
-            state={measurement.state === 'refused' ? 'refused' : 'failed'}
-            reason={measurement.reason}
-            message={measurement.message}
-          />
-        </>
-      ) : null}
+      {stopped && !wide ? <FramePicture measurement={measurement} /> : null}
       {measured ? <Size measurement={measurement} measured={measured} /> : null}
-      {measured ? (
-        <Belief
-          measurement={measurement}
-          measured={measured}
-          ringTable={
-            wide ? null : (
-              <RingTable
-                rings={measured.rings}
-                expandedUncertaintyUm={measured.expandedUncertaintyUm}
-                chosenOrder={chosenOrder}
-                onChooseRing={chooseRing}
-              />
-            )
-          }
-        />
-      ) : null}
-      {running ? null : <UsedForThis measurement={measurement} />}
-      {measured ? <Exports measurement={measurement} /> : null}
-      <HistoryList measurement={measurement} />
+      {tablet && evidence ? (
+        <View style={{ flexDirection: 'row', gap: space.hair, alignItems: 'flex-start' }}>
+          <View style={{ flex: 1, minWidth: 0, gap: space.hair }}>{answer}</View>
+          <View style={{ width: 400, gap: space.hair }}>{evidence}</View>
+        </View>
+      ) : (
+        answer
+      )}
     </Screen>
   );
 }
