@@ -33,7 +33,7 @@ export interface CompareChartProps {
   heightPx?: number;
 }
 
-const load = () => import('@/components/viewer/drawings').then((m) => m.CompareDrawing);
+const load = () => import('@/components/viewer/drawings').then((m) => m.drawings.compare);
 
 /** Ring radii against what was varied, with a straight line for each order. */
 export function CompareChart(props: CompareChartProps) {

@@ -9,7 +9,7 @@ export interface LineProfileChartProps {
   heightPx?: number;
 }
 
-const load = () => import('@/components/viewer/drawings').then((m) => m.LineProfileDrawing);
+const load = () => import('@/components/viewer/drawings').then((m) => m.drawings.line);
 
 /** Counts above black along a line over the frame. */
 export function LineProfileChart(props: LineProfileChartProps) {

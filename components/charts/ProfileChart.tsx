@@ -12,7 +12,7 @@ export interface ProfileChartProps {
   misfit?: boolean;
 }
 
-const load = () => import('@/components/viewer/drawings').then((m) => m.ProfileDrawing);
+const load = () => import('@/components/viewer/drawings').then((m) => m.drawings.profile);
 
 /** Radial profile on log counts over its misfit: measured dots, model line, a plumb for each dark ring. */
 export function ProfileChart(props: ProfileChartProps) {

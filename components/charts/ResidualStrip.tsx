@@ -21,7 +21,7 @@ export interface ResidualStripProps {
   heightPx?: number;
 }
 
-const load = () => import('@/components/viewer/drawings').then((m) => m.ResidualDrawing);
+const load = () => import('@/components/viewer/drawings').then((m) => m.drawings.residual);
 
 /** Distance of each point from its line, in a slot; what lies beyond is pinned and named. */
 export function ResidualStrip(props: ResidualStripProps) {

@@ -20,7 +20,7 @@ export interface SizesChartProps {
   heightPx?: number;
 }
 
-const load = () => import('@/components/viewer/drawings').then((m) => m.SizesDrawing);
+const load = () => import('@/components/viewer/drawings').then((m) => m.drawings.sizes);
 
 /** Sizes of a capture in the order of its frames, in the gap of the stated uncertainty. */
 export function SizesChart(props: SizesChartProps) {

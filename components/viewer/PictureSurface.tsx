@@ -134,7 +134,8 @@ export function PictureSurface({ draw, onSize, ref }: Props) {
   );
   useEffect(
     () => () => {
-      if (request.current !== 0) cancelAnimationFrame(request.current);
+      cancelAnimationFrame(request.current);
+      request.current = 0;
       raster.current?.surface.dispose();
       raster.current = null;
       shown.current?.dispose();

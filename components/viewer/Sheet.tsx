@@ -49,7 +49,7 @@ export interface SheetProps {
   handle?: Ref<SheetHandle>;
 }
 
-const load = () => import('./drawings').then((m) => m.SheetDrawing);
+const load = () => import('./drawings').then((m) => m.drawings.sheet);
 
 /** Frame, unwrapped view, profile and misfit on one canvas, so that plumbs fall through all of them. */
 export function Sheet(props: SheetProps) {

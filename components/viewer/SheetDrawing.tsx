@@ -72,8 +72,8 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
   const dark = useMemo(() => (measured ? darkRings(measured.rings) : []), [measured]);
   const onFrame = useMemo(() => coloursFor(negative ? 'light' : 'dark', wavelengthNm), [negative, wavelengthNm]);
   const line = useMemo(
-    () => (plane && props.segment ? lineProfile(plane, props.segment) : null),
-    [plane, props.segment],
+    () => (plane && props.segment && props.below === 'line' ? lineProfile(plane, props.segment) : null),
+    [plane, props.segment, props.below],
   );
 
   const fitted = useMemo((): Place | null => {
@@ -111,7 +111,13 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
   useEffect(() => {
     if (!moved.current || !place.current) show(fitted);
   }, [fitted, show]);
-  useEffect(() => () => cancelAnimationFrame(told.current), []);
+  useEffect(
+    () => () => {
+      cancelAnimationFrame(told.current);
+      told.current = 0;
+    },
+    [],
+  );
 
   const move = (next: (now: Place) => Place) => {
     if (!place.current || !plane) return;

@@ -41,9 +41,11 @@ export function ViewerDesk({ props, state }: { props: ViewerProps; state: Viewer
   const [pointer] = useState(createPointerStore);
   const sheet = useRef<SheetHandle>(null);
   const title = `${capture.apertureSerial}, frame ${position.number}`;
-  const views = viewsFor(false, misfit !== null);
+  // What is still being read keeps its place from the start.
+  const coming = measured === null && props.noRings === null;
+  const views = viewsFor(false, misfit !== null || coming);
   const view = state.view === 'misfit' && misfit ? 'misfit' : 'frame';
-  const charted = measured !== null;
+  const charted = measured !== null || coming;
   const lines = state.layers.line || !charted;
   const tableWidth = Math.round(Math.min(462, Math.max(380, room.width * 0.373)));
   const layout = useMemo(
@@ -223,14 +225,20 @@ export function ViewerDesk({ props, state }: { props: ViewerProps; state: Viewer
                     ringCount={dark.length}
                     pixelPitchUm={measured.pixelPitchUm}
                   />
-                ) : null}
+                ) : (
+                  <View style={[plateStyle, { height: 84 }]} />
+                )}
                 <View style={{ flex: 1, flexDirection: 'row', gap: space.hair, minHeight: 0 }}>
                   {charted || misfit ? (
                     <View style={[plateStyle, { flex: 0.86, minWidth: 0 }]}>
                       <Text variant="section" level={2} style={{ marginBottom: 4 }}>
                         Layers
                       </Text>
-                      <LayersList state={state} measured={charted} maskedPixels={misfit ? maskedCount(misfit) : null} />
+                      <LayersList
+                        state={state}
+                        measured={measured !== null}
+                        maskedPixels={misfit ? maskedCount(misfit) : null}
+                      />
                     </View>
                   ) : null}
                   <View style={[plateStyle, { flex: 1.14, minWidth: 0 }]}>

@@ -27,10 +27,12 @@ export function ViewerPhone({ props, state }: { props: ViewerProps; state: Viewe
   const { capture, frame, position, plane, misfit, measured } = props;
   const { colours } = useLook();
   const [room, setRoom] = useState({ width: 0, height: 0 });
-  const views = viewsFor(measured !== null, misfit !== null);
+  // What is still being read keeps its place from the start.
+  const coming = measured === null && props.noRings === null;
+  const views = viewsFor(measured !== null || coming, misfit !== null || coming);
   const view = views.some((v) => v.value === state.view) ? state.view : 'frame';
   const lines = state.layers.line;
-  const charted = measured !== null || lines;
+  const charted = measured !== null || coming || lines;
   const layout = useMemo(() => {
     const tight = room.height < 480;
     const chart = charted ? (tight ? 150 : room.height > 760 ? 240 : 196) : 0;

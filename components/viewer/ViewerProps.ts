@@ -23,7 +23,7 @@ export interface ViewerProps {
   planeNotice: ReactNode;
   misfit: MisfitPlane | null;
   measured: MeasuredFrame | null;
-  /** Null where rings are shown. */
+  /** Null where rings are shown, or are still to come. */
   noRings: NoRings | null;
   pixelPitchUm: number | null;
   film: ReactNode;

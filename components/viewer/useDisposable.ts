@@ -1,16 +1,17 @@
-import { useEffect, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 
-/** Something in the memory of the drawing engine, made anew when `make` changes and given back when it is replaced. */
+/**
+ * Something in the memory of the drawing engine. It is made anew when `make` changes; what was there before stays until
+ * its successor is shown and is given back then, the last one when the component goes. `dispose` may be called twice.
+ */
 export function useDisposable<T extends { dispose(): void }>(make: () => T | null): T | null {
-  const [held, setHeld] = useState<{ make: () => T | null; thing: T | null } | null>(null);
+  const [held, setHeld] = useState<T | null>(null);
+  const newest = useRef<T | null>(null);
   useEffect(() => {
-    const thing = make();
-    setHeld({ make, thing });
-    return () => {
-      setHeld((now) => (now?.thing === thing ? null : now));
-      // The picture that still shows it is replaced in the same commit; the memory goes after that.
-      if (thing) setTimeout(() => thing.dispose(), 0);
-    };
+    newest.current = make();
+    setHeld(newest.current);
   }, [make]);
-  return held && held.make === make ? held.thing : null;
+  useEffect(() => () => held?.dispose(), [held]);
+  useEffect(() => () => newest.current?.dispose(), []);
+  return held;
 }

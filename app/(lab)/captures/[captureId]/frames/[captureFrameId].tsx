@@ -49,7 +49,7 @@ export default function FrameScreen() {
   }
   const measurementId = measurement ?? frame.measurement?.id ?? null;
   return measurementId === null ? (
-    <Viewer capture={whole} frame={frame} measurement={null} waiting={false} />
+    <Viewer capture={whole} frame={frame} measurement={null} waiting={false} problem={null} />
   ) : (
     <WithMeasurement capture={whole} frame={frame} measurementId={measurementId} />
   );
@@ -66,7 +66,15 @@ function WithMeasurement({
 }) {
   const measurement = useMeasurement(measurementId);
   const own = measurement.data?.captureFrameId === frame.id ? measurement.data : null;
-  return <Viewer capture={capture} frame={frame} measurement={own} waiting={measurement.isPending} />;
+  return (
+    <Viewer
+      capture={capture}
+      frame={frame}
+      measurement={own}
+      waiting={measurement.isPending}
+      problem={measurement.error}
+    />
+  );
 }
 
 interface ViewerData {
@@ -75,9 +83,10 @@ interface ViewerData {
   measurement: MeasurementDetail | null;
   /** The measurement has not been read yet. */
   waiting: boolean;
+  problem: Error | null;
 }
 
-function Viewer({ capture, frame, measurement, waiting }: ViewerData) {
+function Viewer({ capture, frame, measurement, waiting, problem }: ViewerData) {
   const result = measurement?.result?.status === 'measured' ? measurement.result : null;
   const centrePx = result?.centrePx ?? null;
   const plane = usePlane(frame.state === 'ready' ? frame.frameId : null);
@@ -96,6 +105,9 @@ function Viewer({ capture, frame, measurement, waiting }: ViewerData) {
     if (!centrePx || !profile.data || pixelPitchUm === null || !result) return null;
     return { centrePx, rings: result.rings, profile: profile.data, pixelPitchUm };
   }, [centrePx, profile.data, pixelPitchUm, result]);
+
+  const unread = measured ? null : (problem ?? profile.error);
+  const awaited = measured !== null || waiting || (centrePx !== null && (profile.isPending || pixelPitchUm === null));
 
   const same = capture.frames.filter((f) => f.kind === frame.kind);
   const position = { number: same.findIndex((f) => f.id === frame.id) + 1, count: same.length };
@@ -127,7 +139,13 @@ function Viewer({ capture, frame, measurement, waiting }: ViewerData) {
       }
       misfit={misfit.data ?? null}
       measured={measured}
-      noRings={measured || waiting || (centrePx && profile.isPending) ? null : noRings(frame, measurement)}
+      noRings={
+        unread
+          ? { title: 'Could not read the measurement', message: unread.message }
+          : awaited
+            ? null
+            : noRings(frame, measurement)
+      }
       pixelPitchUm={pixelPitchUm}
       film={
         <FilmStrip
