@@ -7,10 +7,9 @@ import { PiecePicker } from '@/components/capture/PiecePicker';
 import { RecentCaptures } from '@/components/capture/RecentCaptures';
 import { Awaited } from '@/components/ui/Awaited';
 import { Button } from '@/components/ui/Button';
-import { Field } from '@/components/ui/Field';
-import { Icon } from '@/components/ui/Icon';
 import { useNotice } from '@/components/ui/NoticeProvider';
 import { Screen } from '@/components/ui/Screen';
+import { SearchField } from '@/components/ui/SearchField';
 import { Text } from '@/components/ui/Text';
 import { space } from '@/components/ui/tokens';
 import { useLook } from '@/components/ui/useLook';
@@ -22,7 +21,7 @@ import { BENCH } from '@/shared/contracts/roles';
 
 /** Chooses bench and piece, then begins a capture; or goes on with one of the last. */
 export default function BeginCaptureScreen() {
-  const { apertureId } = useLocalSearchParams<{ apertureId?: string }>();
+  const { aperture: askedId } = useLocalSearchParams<{ aperture?: string }>();
   const { desk } = useLook();
   const { warn } = useNotice();
   const { bench, benches, choose, light } = useChosenBench();
@@ -32,7 +31,7 @@ export default function BeginCaptureScreen() {
   const captures = useCaptures();
   const begin = useCreateCapture();
   const canBegin = BENCH.includes(useRole());
-  const chosenId = apertureId ?? null;
+  const chosenId = askedId ?? null;
   const chosen = apertures.data?.find((aperture) => aperture.id === chosenId);
 
   const start = () => {
@@ -99,20 +98,14 @@ export default function BeginCaptureScreen() {
         <Text variant="section" level={2}>
           Piece
         </Text>
-        <Field
-          label="Serial or lot"
-          value={search}
-          onChange={setSearch}
-          autoCapitalize="characters"
-          trailing={<Icon name="search" size={20} />}
-        />
+        <SearchField label="Search pieces" placeholder="Serial or lot" value={search} onChange={setSearch} />
       </View>
       <Awaited result={apertures} what="the pieces">
         {(list) => (
           <PiecePicker
             apertures={list.filter((aperture) => aperture.kind === 'pinhole')}
             chosenId={chosenId}
-            onChoose={(id) => router.setParams({ apertureId: id })}
+            onChoose={(id) => router.setParams({ aperture: id })}
             search={asked}
           />
         )}

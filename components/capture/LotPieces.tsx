@@ -13,7 +13,7 @@ export interface LotPiecesProps {
   /** Said at the right of the chosen piece. */
   chosenWord?: string;
   /** Where a piece leads that has no size yet. */
-  beginHref: (aperture: Aperture) => `/capture?apertureId=${string}`;
+  beginHref: (aperture: Aperture) => `/capture?aperture=${string}`;
 }
 
 /** The pieces of a lot beside the one that is shown: where each stands, and its size. */

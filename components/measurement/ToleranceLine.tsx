@@ -10,6 +10,7 @@ import { tolerancePosition } from './tolerancePosition';
 
 export interface ToleranceLineProps {
   sizeUm: number;
+  standardUncertaintyUm: number | null;
   expandedUncertaintyUm: number | null;
   nominalSizeUm: number;
   /** Null: none agreed, then nothing is drawn. */
@@ -27,8 +28,14 @@ function decimalsOf(...limits: number[]): number {
   return 4;
 }
 
-/** The size in its tolerance: where it lies, not whether it conforms; that is for the review to say by its rule. */
-export function ToleranceLine({ sizeUm, expandedUncertaintyUm, nominalSizeUm, toleranceUm }: ToleranceLineProps) {
+/** The size in its tolerance: where it lies, and how the named rule reads it before anybody has reviewed it. */
+export function ToleranceLine({
+  sizeUm,
+  standardUncertaintyUm,
+  expandedUncertaintyUm,
+  nominalSizeUm,
+  toleranceUm,
+}: ToleranceLineProps) {
   const { desk } = useLook();
   if (toleranceUm === null || toleranceUm <= 0) {
     return (
@@ -37,12 +44,12 @@ export function ToleranceLine({ sizeUm, expandedUncertaintyUm, nominalSizeUm, to
       </Text>
     );
   }
-  const { lower, upper, words, across } = tolerancePosition(sizeUm, expandedUncertaintyUm, nominalSizeUm, toleranceUm);
+  const { lower, upper, words, reading } = tolerancePosition(sizeUm, standardUncertaintyUm, nominalSizeUm, toleranceUm);
   const margin = desk ? -20 : -space.l;
   return (
     <View>
       <View style={{ flexDirection: 'row', alignItems: 'center', gap: 11 }}>
-        <VerdictGlyph verdict="open" scale={1.25} />
+        <VerdictGlyph verdict={reading?.place ?? 'open'} scale={1.25} />
         <View
           style={
             desk
@@ -52,7 +59,7 @@ export function ToleranceLine({ sizeUm, expandedUncertaintyUm, nominalSizeUm, to
         >
           <Text variant="strong">{sentence(words)}</Text>
           <Text variant="small" tone="ink2">
-            {across ? 'The uncertainty reaches over the limit. No verdict yet.' : 'No verdict yet.'}
+            {reading?.words ?? 'Not reviewed.'}
           </Text>
         </View>
       </View>
@@ -62,6 +69,7 @@ export function ToleranceLine({ sizeUm, expandedUncertaintyUm, nominalSizeUm, to
         upper={upper}
         value={sizeUm}
         uncertainty={expandedUncertaintyUm}
+        guard={reading && reading.guardBandUm < toleranceUm ? reading.guardBandUm : 0}
         nominal={nominalSizeUm}
         decimals={Math.max(decimalsOf(lower, upper), nominalSizeUm < 1000 ? 1 : 0)}
         label={`${formatMeasuredText(sizeUm, expandedUncertaintyUm, 'µm')}, ${words}, limits ${formatNumber(lower)} and ${formatNumber(upper)} µm`}

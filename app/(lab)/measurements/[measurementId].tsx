@@ -1,24 +1,21 @@
 import { useLocalSearchParams, router } from 'expo-router';
-import { useState, type ReactNode } from 'react';
+import { useState } from 'react';
 import { Image, View } from 'react-native';
 import { LotPieces } from '@/components/capture/LotPieces';
 import { AgainForm } from '@/components/measurement/AgainForm';
 import { asEntered } from '@/components/measurement/asEntered';
-import { BudgetBars } from '@/components/measurement/BudgetBars';
+import { Belief } from '@/components/measurement/Belief';
 import { HistoryList } from '@/components/measurement/HistoryList';
+import { OlderRun } from '@/components/measurement/OlderRun';
 import { RefusedAnswer } from '@/components/measurement/RefusedAnswer';
 import { RingTable } from '@/components/measurement/RingTable';
 import { RunningAnswer } from '@/components/measurement/RunningAnswer';
-import { ShapeSection } from '@/components/measurement/ShapeSection';
-import { ThreeWays } from '@/components/measurement/ThreeWays';
-import { ToleranceLine } from '@/components/measurement/ToleranceLine';
+import { SizePlate } from '@/components/measurement/SizePlate';
 import { UsedForThis } from '@/components/measurement/UsedForThis';
-import { sayFlags } from '@/components/measurement/words/flagWords';
 import { refusalName } from '@/components/measurement/words/refusalWords';
 import { Awaited } from '@/components/ui/Awaited';
+import { AwaitedScreen } from '@/components/ui/AwaitedScreen';
 import { Button } from '@/components/ui/Button';
-import { Flag } from '@/components/ui/Flag';
-import { HeroNumber } from '@/components/ui/HeroNumber';
 import { IconButton } from '@/components/ui/IconButton';
 import { useNotice } from '@/components/ui/NoticeProvider';
 import { Plate } from '@/components/ui/Plate';
@@ -38,19 +35,16 @@ import { useRole } from '@/hooks/session/SessionProvider';
 import type { Measured } from '@/shared/contracts/measureResult';
 import type { MeasurementDetail } from '@/shared/contracts/measurements';
 import { BENCH } from '@/shared/contracts/roles';
-import { formatDateTime, formatMeasured, formatNumber } from '@/shared/units/format';
+import { formatNumber } from '@/shared/units/format';
 
 /** One run of the engine over one frame: the size first, then why it can be believed. */
 export default function MeasurementScreen() {
   const { measurementId } = useLocalSearchParams<{ measurementId: string }>();
   const measurement = useMeasurement(measurementId);
-  if (measurement.data) return <MeasurementOf key={measurementId} measurement={measurement.data} />;
   return (
-    <Screen title="Measurement" back="/">
-      <Awaited result={measurement} what="the measurement">
-        {() => null}
-      </Awaited>
-    </Screen>
+    <AwaitedScreen result={measurement} what="the measurement" title="Measurement" back="/">
+      {(data) => <MeasurementOf key={measurementId} measurement={data} />}
+    </AwaitedScreen>
   );
 }
 
@@ -169,12 +163,12 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
           : undefined
       }
     >
-      {measurement.newest ? null : <Older measurement={measurement} />}
+      {measurement.newest ? null : <OlderRun measurement={measurement} />}
       {running ? (
         <RunningAnswer state={measurement.state === 'waiting' ? 'waiting' : 'measuring'} stage={measurement.stage} />
       ) : null}
       {stopped && !wide ? <FramePicture measurement={measurement} /> : null}
-      {measured ? <Size measurement={measurement} measured={measured} /> : null}
+      {measured ? <SizePlate measurement={measurement} measured={measured} /> : null}
       {tablet && evidence ? (
         <View style={{ flexDirection: 'row', gap: space.hair, alignItems: 'flex-start' }}>
           <View style={{ flex: 1, minWidth: 0, gap: space.hair }}>{answer}</View>
@@ -184,104 +178,6 @@ function MeasurementOf({ measurement }: { measurement: MeasurementDetail }) {
         answer
       )}
     </Screen>
-  );
-}
-
-function Size({ measurement, measured }: { measurement: MeasurementDetail; measured: Measured }) {
-  const { desk } = useLook();
-  const size = formatMeasured(measured.sizeUm, measured.expandedUncertaintyUm);
-  const darks = measurement.darkCount === 1 ? '1 dark' : `${measurement.darkCount} darks`;
-  const k =
-    measured.coverageFactor === null ? null : `k = ${formatNumber(measured.coverageFactor, { places: 2 })}, 95 %`;
-  return (
-    <Plate>
-      {desk ? (
-        <Text tone="ink2" style={{ marginBottom: 4 }}>
-          {`Measured ${formatDateTime(measurement.finishedAt)} by ${measurement.createdBy}, ${measurement.benchName} revision ${measurement.benchRevision}`}
-        </Text>
-      ) : null}
-      <HeroNumber
-        value={size.value}
-        uncertainty={size.uncertainty ?? undefined}
-        unit="µm"
-        note={[k, `one frame, ${measurement.darkCount === 0 ? 'no darks' : darks}`]
-          .filter((part) => part !== null)
-          .join('\n')}
-      />
-      <View style={{ marginTop: 14 }}>
-        {measured.sizeUm === null ? null : (
-          <ToleranceLine
-            sizeUm={measured.sizeUm}
-            expandedUncertaintyUm={measured.expandedUncertaintyUm}
-            nominalSizeUm={measurement.nominalSizeUm}
-            toleranceUm={measurement.toleranceUm}
-          />
-        )}
-      </View>
-    </Plate>
-  );
-}
-
-interface BeliefProps {
-  measurement: MeasurementDetail;
-  measured: Measured;
-  /** On a phone it stands among these; elsewhere beside the frame. */
-  ringTable: ReactNode;
-}
-
-function Belief({ measurement, measured, ringTable }: BeliefProps) {
-  const { desk } = useLook();
-  const flags = sayFlags(measurement.flags, measured.budget);
-  const { standardUncertaintyUm, expandedUncertaintyUm, coverageFactor } = measured;
-  const budget =
-    standardUncertaintyUm !== null && expandedUncertaintyUm !== null && coverageFactor !== null ? (
-      <BudgetBars
-        budget={measured.budget}
-        standardUncertaintyUm={standardUncertaintyUm}
-        expandedUncertaintyUm={expandedUncertaintyUm}
-        coverageFactor={coverageFactor}
-        effectiveDegreesOfFreedom={measured.effectiveDegreesOfFreedom}
-      />
-    ) : null;
-  const said =
-    flags.length > 0 ? (
-      <Plate>
-        <View
-          role="list"
-          aria-label="Flags"
-          style={desk ? { flexDirection: 'row', flexWrap: 'wrap', columnGap: 24 } : null}
-        >
-          {flags.map((flag) => (
-            <View key={flag.flag} role="listitem" style={desk ? { flexBasis: '45%', flexGrow: 1 } : null}>
-              <Flag title={flag.warning ? `Look: ${flag.name.toLowerCase()}` : flag.name} detail={flag.text} />
-            </View>
-          ))}
-        </View>
-      </Plate>
-    ) : null;
-  if (!desk) {
-    return (
-      <>
-        {said}
-        <ThreeWays result={measured} />
-        {ringTable}
-        {budget}
-        <ShapeSection result={measured} />
-      </>
-    );
-  }
-  return (
-    <>
-      {said}
-      <View style={{ flexDirection: 'row', gap: space.hair, alignItems: 'stretch' }}>
-        <View style={{ flex: 1 }}>{budget}</View>
-        <View style={{ flex: 1, gap: space.hair }}>
-          <ThreeWays result={measured} />
-          <ShapeSection result={measured} />
-          <Plate padding="none" style={{ flexGrow: 1 }} />
-        </View>
-      </View>
-    </>
   );
 }
 
@@ -366,20 +262,6 @@ function FramePicture({ measurement }: { measurement: MeasurementDetail }) {
   );
 }
 
-function Older({ measurement }: { measurement: MeasurementDetail }) {
-  const newest = measurement.history[0];
-  return (
-    <Plate surface="lift">
-      <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.m }}>
-        <Text variant="small" tone="ink0" style={{ flex: 1 }}>
-          An older run. A newer one of the same frame stands beside it.
-        </Text>
-        {newest ? <Button dense label="Go to the newest" href={`/measurements/${newest.id}`} /> : null}
-      </View>
-    </Plate>
-  );
-}
-
 function Exports({ measurement }: { measurement: MeasurementDetail }) {
   const { warn, say } = useNotice();
   const csv = useMeasurementCsv(measurement.id);
@@ -437,7 +319,7 @@ function Pieces({ measurement }: { measurement: MeasurementDetail }) {
           apertures={apertures}
           chosenId={measurement.apertureId}
           chosenWord={measurement.state === 'measured' ? undefined : refusalWord(measurement)}
-          beginHref={(aperture) => `/capture?apertureId=${aperture.id}`}
+          beginHref={(aperture) => `/capture?aperture=${aperture.id}`}
         />
       )}
     </Awaited>

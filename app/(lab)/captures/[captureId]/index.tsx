@@ -26,6 +26,7 @@ import { shortName } from '@/components/capture/shortName';
 import { SizesAsTheyArrive } from '@/components/capture/SizesAsTheyArrive';
 import { asEntered } from '@/components/measurement/asEntered';
 import { Awaited } from '@/components/ui/Awaited';
+import { AwaitedScreen } from '@/components/ui/AwaitedScreen';
 import { Button } from '@/components/ui/Button';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { useNotice } from '@/components/ui/NoticeProvider';
@@ -54,13 +55,10 @@ const pickFrom = { camera: snapFrame, library: pickFromLibrary, files: pickStill
 export default function CaptureScreen() {
   const { captureId } = useLocalSearchParams<{ captureId: string }>();
   const capture = useCapture(captureId);
-  if (capture.data) return <Capture key={captureId} capture={capture.data} />;
   return (
-    <Screen title="Capture" back="/capture">
-      <Awaited result={capture} what="the capture">
-        {() => null}
-      </Awaited>
-    </Screen>
+    <AwaitedScreen result={capture} what="the capture" title="Capture" back="/capture">
+      {(data) => <Capture key={captureId} capture={data} />}
+    </AwaitedScreen>
   );
 }
 
@@ -233,7 +231,7 @@ function Pieces({ capture }: { capture: CaptureDetail }) {
           apertures={apertures}
           chosenId={capture.apertureId}
           chosenWord="now"
-          beginHref={(aperture) => `/capture?apertureId=${aperture.id}`}
+          beginHref={(aperture) => `/capture?aperture=${aperture.id}`}
         />
       )}
     </Awaited>
