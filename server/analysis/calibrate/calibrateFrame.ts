@@ -111,6 +111,8 @@ export function calibrateFrame({ light, darks, flats, measureCase }: Calibration
     if (mask[i] & MASK.clipped) clippedPixels++;
   }
   const { noise, notes } = marked > 0 ? estimate() : before;
+  // Rounding to whole counts is never less than the variance of an even spread over one count.
+  noise.floor = Math.max(noise.floor, 1 / 12);
   // Noise of the master dark is part of the frame's own scatter; a gain from the record does not know it.
   if (noise.source === 'record') noise.floor += darkVariance;
   assumed.push(...notes);

@@ -80,7 +80,12 @@ export function cellModel(
     { u: fresnelU(optics, radius), illumination: values.illumination, pixelV: (scale * pitchMm) / distanceMm },
     largestV,
   );
-  const lastRow = table.length / COLUMNS - 2;
+  // Local copies: reaching an imported name once a pixel costs more than the arithmetic.
+  const columns = COLUMNS;
+  const parameters = COUNT;
+  const perV = 1 / TABLE_STEP;
+  const cubic = hermite;
+  const lastRow = table.length / columns - 2;
   const mean = Math.sqrt(1 + oval * oval);
   const [sinX, sinY] = [Math.sin(values.tiltX), Math.sin(values.tiltY)];
   const [cosX, cosY] = [Math.cos(values.tiltX), Math.cos(values.tiltY)];
@@ -97,25 +102,25 @@ export function cellModel(
     const far = across + z * z;
     const form = (mean + values.ovalCos) * x * x + (mean - values.ovalCos) * y * y + 2 * values.ovalSin * x * y;
     const v = scale * Math.sqrt(Math.max(0, form) / far);
-    const place = v / TABLE_STEP;
+    const place = v * perV;
     let row = place | 0;
     let t = place - row;
     if (row > lastRow) {
       row = lastRow;
       t = 1;
     }
-    const at = row * COLUMNS;
-    const next = at + COLUMNS;
+    const at = row * columns;
+    const next = at + columns;
     const slope = table[at + 1] + t * (table[next + 1] - table[at + 1]);
     const curvature = table[at + 2] + t * (table[next + 2] - table[at + 2]);
     const dvdr = (scale * pitchMm) / Math.sqrt(far);
     const spread = 0.5 * cells.radiusVariance[c] * dvdr * dvdr * curvature;
     // Rayleigh–Sommerfeld: the field falls with cos θ and with 1/distance, so the irradiance with cos⁴ θ.
     const fall = (z * z * z * z) / (far * far);
-    const intensity = (hermite(table[at], table[at + 1], table[next], table[next + 1], t) + spread) * fall;
+    const intensity = (cubic(table[at], table[at + 1], table[next], table[next + 1], t) + spread) * fall;
     model[c] = amplitude * intensity + values.background + values.slopeX * cells.x[c] + values.slopeY * cells.y[c];
     if (!withJacobian) continue;
-    const j = c * COUNT;
+    const j = c * parameters;
     const steep = amplitude * fall * slope;
     const bySize = table[at + 3] + t * (table[next + 3] - table[at + 3]);
     // ∂v/∂x of the place on the sensor, tilt and oval to first order.

@@ -20,6 +20,10 @@ const RADII = 500;
 const BLOCKS_PER_FRINGE = 6;
 /** Part of the window's radius over which it falls to nothing. */
 const TAPER = 0.5;
+/** Least modulus over the noise's of a frequency that is used. */
+const CLEAR = 4;
+/** Uneven response of the sensor in the spectrum, part of its largest value. Computed on simulated frames. */
+const UNEVEN = 2e-4;
 /** What the window and the reduction to blocks leave, relative. Computed on simulated frames. */
 const METHOD = 3e-4;
 
@@ -47,10 +51,11 @@ export function secondOpinion(
   const window = Math.min(reach, 12 * fringe);
   const block = Math.max(1, Math.floor(fringe / BLOCKS_PER_FRINGE), Math.ceil((2 * window) / SIZE));
   if (fringe / block < 3) return none('The rings are too narrow for a transform of this size.');
-  const spectrum = windowedSpectrum(frame, x, y, window, block);
   const cutOff = (SIZE * block) / fringe;
+  const spectrum = windowedSpectrum(frame, x, y, window, block, cutOff);
   const bins: number[] = [];
-  for (let bin = Math.ceil(LOWEST * cutOff); bin <= Math.min(SIZE / 2 - 2, HIGHEST * cutOff); bin++) bins.push(bin);
+  for (let bin = Math.ceil(LOWEST * cutOff); bin <= Math.min(SIZE / 2 - 2, HIGHEST * cutOff); bin++)
+    if (spectrum.modulus[bin] > CLEAR * spectrum.noise) bins.push(bin);
   if (bins.length < 5) return none('The frame does not show enough of the pattern for its transform.');
   const windowBlocks = window / block;
   // Hankel transform of model × window on the radii of the window; frequencies in cycles a block.
@@ -73,6 +78,11 @@ export function secondOpinion(
     return kernel.map((row) => row.reduce((s, k, i) => s + k * intensity[i], 0));
   };
   const y0 = bins.map((bin) => spectrum.modulus[bin]);
+  // Neighbouring bins and directions are not independent: the window blurs the spectrum over several.
+  const alike = Math.max(1, (SIZE * block) / (2 * window));
+  const deviation = bins.map((bin) =>
+    Math.hypot(spectrum.noise / Math.sqrt(2 * Math.max(1, spectrum.numbers[bin] / alike)), UNEVEN * Math.max(...y0)),
+  );
   const first = modelled(firstSizeMm);
   const amplitude = y0.reduce((s, v, i) => s + v * Math.abs(first[i]), 0) / first.reduce((s, v) => s + v * v, 0);
   const fit = leastSquares(
@@ -89,6 +99,7 @@ export function secondOpinion(
         { name: 'offset', unit: 'count', initialValue: 0 },
       ],
       y: y0,
+      yUncertainty: deviation,
       evaluate: (values, model, jacobian) => {
         const now = modelled(Math.exp(values[0]));
         const step = 1e-3;
@@ -111,11 +122,10 @@ export function secondOpinion(
   if (fit.status === 'non-finite' || size.stdUncertainty === null || size.atBound)
     return none('The transform of the frame does not follow that of a round hole.');
   const sizeUm = Math.exp(size.value) * 1000;
-  // Neighbouring bins are not independent: the window blurs the spectrum over several.
-  const alike = Math.max(1, (SIZE * block) / (2 * window));
+  const widen = Math.sqrt(alike * Math.max(1, fit.reducedChiSquare ?? 1));
   return {
     sizeUm,
-    standardUncertaintyUm: sizeUm * Math.hypot(size.stdUncertainty * Math.sqrt(alike), METHOD),
+    standardUncertaintyUm: sizeUm * Math.hypot(size.stdUncertainty * widen, METHOD),
     reason: null,
   };
 }
@@ -154,6 +164,7 @@ function windowedSpectrum(
   cy: number,
   window: number,
   block: number,
+  cutOff: number,
 ) {
   const data = new Float64Array(2 * SIZE * SIZE);
   const filled = new Float64Array(SIZE * SIZE);
@@ -188,7 +199,8 @@ function windowedSpectrum(
       const f = Math.hypot(fx, fy);
       const bin = Math.round(f);
       if (bin >= SIZE / 2) continue;
-      modulus[bin] += Math.hypot(data[2 * (y * SIZE + x)], data[2 * (y * SIZE + x) + 1]);
+      const at = 2 * (y * SIZE + x);
+      modulus[bin] += data[at] * data[at] + data[at + 1] * data[at + 1];
       frequency[bin] += f;
       n[bin]++;
     }
@@ -197,5 +209,9 @@ function windowedSpectrum(
     modulus[b] /= Math.max(1, n[b]);
     frequency[b] /= Math.max(1, n[b]) * SIZE;
   }
-  return { modulus, frequency };
+  // Beyond the cut-off there is noise alone; its power lies beneath the pattern's as well.
+  const beyond = modulus.slice(Math.min(SIZE / 2 - 8, Math.ceil(1.25 * cutOff)), SIZE / 2);
+  const floor = beyond.reduce((s, power) => s + power, 0) / beyond.length;
+  for (let b = 0; b < SIZE / 2; b++) modulus[b] = Math.sqrt(Math.max(0, modulus[b] - floor));
+  return { modulus, frequency, noise: Math.sqrt(floor), numbers: n };
 }
