@@ -4,19 +4,14 @@ import { EmptyState } from '@/components/ui/EmptyState';
 import { Row } from '@/components/ui/Row';
 import { SearchField } from '@/components/ui/SearchField';
 import { space } from '@/components/ui/tokens';
+import { useLook } from '@/components/ui/useLook';
 import type { Lot } from '@/shared/contracts/lots';
 import { dueWords } from './apertureWords';
 import { LotStrip } from './LotStrip';
 
-export interface LotListProps {
-  lots: readonly Lot[];
-  selectedId?: string;
-  /** Narrow: beside the lot that is open. */
-  narrow?: boolean;
-}
-
 /** Lots with how far each is, to be searched by number, client or order. */
-export function LotList({ lots, selectedId, narrow }: LotListProps) {
+export function LotList({ lots }: { lots: readonly Lot[] }) {
+  const { layout } = useLook();
   const [search, setSearch] = useState('');
   const wanted = search.trim().toLowerCase();
   const found = lots.filter((lot) =>
@@ -32,23 +27,18 @@ export function LotList({ lots, selectedId, narrow }: LotListProps) {
           key={lot.id}
           icon="lots"
           title={lot.number}
-          aside={narrow ? undefined : lot.clientName}
-          subtitle={
-            narrow
-              ? lot.clientName
-              : [
-                  `${lot.apertureCount} ${lot.apertureCount === 1 ? 'aperture' : 'apertures'}`,
-                  dueWords(lot.dueOn),
-                ].join(', ')
-          }
+          aside={lot.clientName}
+          subtitle={[
+            `${lot.apertureCount} ${lot.apertureCount === 1 ? 'aperture' : 'apertures'}`,
+            dueWords(lot.dueOn),
+          ].join(', ')}
           href={`/lots/${lot.id}`}
-          selected={lot.id === selectedId}
           trailing={
             <LotStrip
               apertureCount={lot.apertureCount}
               measuredCount={lot.measuredCount}
               refusedCount={lot.refusedCount}
-              style={{ width: narrow ? 72 : 118 }}
+              style={{ width: layout === 'phone' ? 84 : 118 }}
             />
           }
         />

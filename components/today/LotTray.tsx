@@ -1,6 +1,5 @@
 import { View } from 'react-native';
 import { apertureLimits, readAperture } from '@/components/lots/apertureReading';
-import { sizeSentence } from '@/components/lots/apertureWords';
 import { Slot } from '@/components/ui/Slot';
 import { StageGlyph } from '@/components/ui/StageGlyph';
 import { Text } from '@/components/ui/Text';
@@ -31,7 +30,6 @@ export function LotTray({ lotId, apertures, nextId }: LotTrayProps) {
           <Touch
             key={aperture.id}
             href={`/lots/${lotId}?aperture=${aperture.id}`}
-            label={`${sizeSentence(aperture.serial, size, uncertainty, reading.words)}${isNext ? ', next' : ''}`}
             style={({ pressed }) => ({
               flexGrow: 1,
               flexBasis: 128,

@@ -81,7 +81,6 @@ export function RecentRows({ recent }: { recent: Today['recent'] }) {
             title={one.apertureSerial}
             subtitle={`${formatTime(one.finishedAt ?? one.createdAt)}, ${one.benchName}`}
             href={`/measurements/${one.id}`}
-            label={`${one.apertureSerial}, ${text.value} ± ${text.uncertainty ?? 'unknown'} µm`}
             trailing={
               <View style={{ flexDirection: 'row', alignItems: 'baseline', gap: space.s }}>
                 <Text variant="medium" style={{ fontSize: 20, lineHeight: 24 }}>

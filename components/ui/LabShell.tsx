@@ -36,9 +36,11 @@ export function LabShell({ places, online, userName, children }: LabShellProps) 
           paddingBottom: insets.bottom,
         }}
       >
-        <WavelengthRule wavelengthNm={light.wavelengthNm} benchLabel={light.label} />
-        <OfflineLine online={online} />
-        <NoticeLine />
+        <View role="banner">
+          <WavelengthRule wavelengthNm={light.wavelengthNm} benchLabel={light.label} />
+          <OfflineLine online={online} />
+          <NoticeLine />
+        </View>
         <View style={{ flex: 1, minHeight: 0, flexDirection: 'row' }}>
           {desk ? <Rail tools={<RailTools userName={userName} here={places.current === 'account'} />} /> : null}
           <View style={{ flex: 1, minWidth: 0, minHeight: 0 }}>{children}</View>
@@ -61,7 +63,7 @@ function RailTools({ userName, here }: { userName: string; here: boolean }) {
   return (
     <View style={{ gap: space.hair }}>
       <Touch
-        label={`Theme: ${theme}. Change to ${other}`}
+        label={`${theme === 'dark' ? 'Dark' : 'Light'} theme. Change to ${other}`}
         onPress={() => setTheme(other)}
         style={({ pressed }) => ({
           height: 68,
@@ -77,7 +79,7 @@ function RailTools({ userName, here }: { userName: string; here: boolean }) {
       </Touch>
       <Touch
         href="/account"
-        label={`Account of ${userName}`}
+        label={`${initialsOf(userName)}, account of ${userName}`}
         current={here}
         style={({ pressed }) => ({
           height: 60,

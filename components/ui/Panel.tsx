@@ -5,6 +5,7 @@ import { IconButton } from './IconButton';
 import { Text } from './Text';
 import { radius, shell, space } from './tokens';
 import { useLook } from './useLook';
+import { webProps } from './webProps';
 
 export interface PanelProps {
   title?: string;
@@ -66,14 +67,19 @@ export function Panel({
           }}
         >
           {back === undefined ? null : <IconButton icon="back" label="Back" href={back} />}
-          <Text variant="title" level={level} lines={1} style={{ flexShrink: 1 }}>
+          <Text
+            variant="title"
+            level={level}
+            lines={1}
+            style={note ? { flexShrink: 0, maxWidth: '75%' } : { flexShrink: 1 }}
+          >
             {title}
           </Text>
           {note ? (
             <Text
               tone="ink2"
               lines={1}
-              style={{ flexShrink: 50, marginLeft: back === undefined && !action ? 'auto' : 0 }}
+              style={{ flexShrink: 1, marginLeft: back === undefined && !action ? 'auto' : 0 }}
             >
               {note}
             </Text>
@@ -90,6 +96,7 @@ export function Panel({
           style={{ flex: 1, backgroundColor: colours.plate, borderRadius: radius.plate }}
           contentContainerStyle={{ flexGrow: 1, backgroundColor: colours.gap }}
           keyboardShouldPersistTaps="handled"
+          {...webProps({ tabIndex: 0 })}
         >
           {content}
           <View

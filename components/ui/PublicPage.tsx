@@ -34,6 +34,7 @@ export function PublicPage({ title, heading, children, foot, low }: PublicPagePr
       <Mark size={side ? 54 : 38} />
       <Text
         tone="ink0"
+        level={heading ? undefined : 1}
         style={{
           fontFamily: fontFamily.figureMedium,
           fontSize: side ? 44 : Math.min(40, widthPx / 9.6),
@@ -61,15 +62,18 @@ export function PublicPage({ title, heading, children, foot, low }: PublicPagePr
     return (
       <View style={{ flex: 1, flexDirection: 'row', gap: space.hair, backgroundColor: colours.gap }}>
         <DocumentTitle title={title} />
-        <View style={{ flex: 1, minWidth: 0, overflow: 'hidden' }}>
+        <View
+          role="complementary"
+          aria-label="What Ringwright does"
+          style={{ flex: 1, minWidth: 0, overflow: 'hidden' }}
+        >
           <PatternPicture frameHeight={frameHeight} footHeight={Math.min(150, heightPx - frameHeight - 90)} rings={7} />
           <Text tone="ink2" style={{ position: 'absolute', left: 48, bottom: 40, fontSize: 16, lineHeight: 23 }}>
             The size of a small hole, from the rings it throws.
           </Text>
         </View>
-        <View style={{ width: 456, backgroundColor: colours.plate }}>
+        <View role="main" style={{ width: 456, backgroundColor: colours.plate }}>
           <ScrollView
-            role="main"
             style={{ flex: 1 }}
             contentContainerStyle={{ paddingHorizontal: 48, paddingVertical: 48, flexGrow: 1 }}
             keyboardShouldPersistTaps="handled"

@@ -128,8 +128,8 @@ export function Screen({
   return (
     <View style={{ flex: 1, minHeight: 0 }}>
       {name}
-      <ScreenHead title={title} subtitle={subtitle} back={back} action={action} level={1} />
       <View role="main" style={{ flex: 1, minHeight: 0 }}>
+        <ScreenHead title={title} subtitle={subtitle} back={back} action={action} level={1} />
         {scroll ? (
           <ScrollView
             style={{ flex: 1 }}
@@ -151,8 +151,9 @@ export function Screen({
         ) : (
           children
         )}
+        {foot ? <View style={{ backgroundColor: colours.gap, paddingTop: space.hair }}>{foot}</View> : null}
       </View>
-      {foot ? <View style={{ backgroundColor: colours.gap, paddingTop: space.hair }}>{foot}</View> : <FootNav />}
+      {foot ? null : <FootNav />}
     </View>
   );
 }

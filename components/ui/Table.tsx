@@ -11,6 +11,8 @@ import { useLook } from './useLook';
 export interface Column<R> {
   key: string;
   title: string;
+  /** The title is only for those who hear it: the column is too narrow. */
+  hideTitle?: boolean;
   /** px; without it the column shares what is left. */
   width?: number;
   /** Numbers stand right. */
@@ -88,10 +90,15 @@ export function Table<R>({
               </Text>
             );
             return (
-              <View key={column.key} role="columnheader" style={cellStyle(column)}>
-                {column.sortBy ? (
+              <View
+                key={column.key}
+                role="columnheader"
+                aria-label={column.hideTitle ? column.title : undefined}
+                style={cellStyle(column)}
+              >
+                {column.hideTitle ? null : column.sortBy ? (
                   <Touch
-                    label={`Sort by ${column.title || column.key}${sorted ? (sort.descending ? ', now descending' : ', now ascending') : ''}`}
+                    label={`Sort by ${column.title}${sorted ? (sort.descending ? ', now descending' : ', now ascending') : ''}`}
                     onPress={() => setSort({ key: column.key, descending: sorted ? !sort.descending : false })}
                     style={{ minHeight: 34, flexDirection: 'row', alignItems: 'center', gap: 4 }}
                   >
@@ -112,10 +119,17 @@ export function Table<R>({
           const key = rowKey(row);
           const chosen = selectedKey === key;
           const lifted = chosen || isFirst?.(row) === true;
-          const cells = columns.map((column) => {
+          const href = rowHref?.(row);
+          const goes = href !== undefined || onRowPress !== undefined;
+          const cells = columns.map((column, i) => {
             const content = column.cell(row);
+            const carriesTouch = goes && i === 0;
             return (
-              <View key={column.key} role="cell" style={cellStyle(column)}>
+              <View
+                key={column.key}
+                role="cell"
+                style={[cellStyle(column), carriesTouch ? { position: 'static' } : null]}
+              >
                 {typeof content === 'string' || typeof content === 'number' ? (
                   <Text align={column.align} lines={1}>
                     {content}
@@ -123,18 +137,26 @@ export function Table<R>({
                 ) : (
                   content
                 )}
+                {carriesTouch ? (
+                  <Touch
+                    href={href}
+                    onPress={onRowPress ? () => onRowPress(row) : undefined}
+                    label={rowLabel?.(row) ?? key}
+                    current={chosen}
+                    style={({ pressed }) => ({
+                      position: 'absolute',
+                      inset: 0,
+                      zIndex: 1,
+                      borderRadius: radius.plate,
+                      backgroundColor: pressed ? `${colours.ink0}14` : 'transparent',
+                    })}
+                  >
+                    {null}
+                  </Touch>
+                ) : null}
               </View>
             );
           });
-          const frame = (pressed: boolean) => [
-            line,
-            {
-              minHeight: desk ? shell.rowDesk : 54,
-              paddingVertical: 4,
-              borderRadius: radius.plate,
-              backgroundColor: lifted || pressed ? colours.lift : colours.plate,
-            },
-          ];
           const bar = chosen ? (
             <View
               style={{
@@ -147,25 +169,23 @@ export function Table<R>({
               }}
             />
           ) : null;
-          if (!rowHref && !onRowPress) {
-            return (
-              <View key={key} role="row" style={frame(false)}>
-                {cells}
-              </View>
-            );
-          }
           return (
-            <TouchRow
+            <View
               key={key}
-              label={rowLabel?.(row)}
-              href={rowHref?.(row)}
-              onPress={onRowPress ? () => onRowPress(row) : undefined}
-              chosen={chosen}
-              frame={frame}
+              role="row"
+              style={[
+                line,
+                {
+                  minHeight: desk ? shell.rowDesk : 54,
+                  paddingVertical: 4,
+                  borderRadius: radius.plate,
+                  backgroundColor: lifted ? colours.lift : colours.plate,
+                },
+              ]}
             >
               {bar}
               {cells}
-            </TouchRow>
+            </View>
           );
         })}
       </View>
@@ -179,29 +199,5 @@ function SortArrow({ descending }: { descending: boolean }) {
     <View style={descending ? null : { transform: [{ rotate: '180deg' }] }}>
       <Icon name="down" size={12} colour={colours.ink0} strokeWidth={2.5} />
     </View>
-  );
-}
-
-interface TouchRowProps {
-  label?: string;
-  href?: Href;
-  onPress?: () => void;
-  chosen: boolean;
-  frame: (pressed: boolean) => object[];
-  children: ReactNode;
-}
-
-function TouchRow({ label, href, onPress, chosen, frame, children }: TouchRowProps) {
-  return (
-    <Touch
-      href={href}
-      onPress={onPress}
-      role="row"
-      label={label}
-      selected={chosen}
-      style={({ pressed }) => frame(pressed)}
-    >
-      {children}
-    </Touch>
   );
 }

@@ -3,7 +3,6 @@ import { View } from 'react-native';
 import { AperturePanel } from '@/components/lots/AperturePanel';
 import { ApertureTable } from '@/components/lots/ApertureTable';
 import { countOfKind, dueWords } from '@/components/lots/apertureWords';
-import { LotList } from '@/components/lots/LotList';
 import { LotSummary } from '@/components/lots/LotSummary';
 import { Awaited } from '@/components/ui/Awaited';
 import { Button } from '@/components/ui/Button';
@@ -14,16 +13,15 @@ import { Screen } from '@/components/ui/Screen';
 import { Text } from '@/components/ui/Text';
 import { useLook } from '@/components/ui/useLook';
 import { useChosenBench } from '@/hooks/queries/chosenBench';
-import { useLot, useLots } from '@/hooks/queries/lots';
+import { useLot } from '@/hooks/queries/lots';
 import { useRole } from '@/hooks/session/SessionProvider';
 import { BENCH, STAFF } from '@/shared/contracts/roles';
 
 export default function LotScreen() {
   const { lotId, aperture: apertureId } = useLocalSearchParams<{ lotId: string; aperture?: string }>();
-  const { desk, layout } = useLook();
+  const { desk } = useLook();
   const role = useRole();
   const staff = STAFF.includes(role);
-  const lots = useLots();
   const lot = useLot(lotId);
   const { light } = useChosenBench();
   const data = lot.data;
@@ -70,19 +68,6 @@ export default function LotScreen() {
       }
       back="/lots"
       action={actions}
-      list={
-        layout === 'wide'
-          ? {
-              title: 'Lots',
-              width: 300,
-              content: (
-                <Awaited result={lots} what="the lots">
-                  {(list) => <LotList lots={list} selectedId={lotId} narrow />}
-                </Awaited>
-              ),
-            }
-          : undefined
-      }
       evidence={desk && chosen ? { title: chosen.serial, width: 400, content: panel } : undefined}
       {...light}
     >
