@@ -79,11 +79,15 @@ function startService({ name, file, env, logFolder }) {
 }
 
 /**
- * The end of a log, for the person who has to find out what went wrong.
+ * The end of a log, without the lines of a stack, for the person who has to find out what went wrong.
  * @param {string} file
  */
 function lastLines(file) {
-  return fs.readFileSync(file, 'utf8').trim().split('\n').slice(-20).join('\n');
+  const lines = fs.readFileSync(file, 'utf8').trim().split('\n');
+  return lines
+    .filter((line) => !/^\s+at /.test(line))
+    .slice(-20)
+    .join('\n');
 }
 
 module.exports = { startService, lastLines };
