@@ -5,7 +5,7 @@ import { CaptureFrameEntity } from '../../../server/entities/CaptureFrameEntity'
 import { FrameEntity } from '../../../server/entities/FrameEntity';
 import { MeasurementEntity } from '../../../server/entities/MeasurementEntity';
 import { call } from '../support/call';
-import { measuredRun } from '../support/fillLaboratory';
+import { measuredResult, measuredRun } from '../support/fillLaboratory';
 import { join, registerLaboratory, type SignedIn } from '../support/people';
 import { addBench, addClient, addLot, pinhole } from '../support/records';
 import { startTestApp, type TestApp } from '../support/startTestApp';
@@ -40,7 +40,7 @@ async function addLight(apertureId: string, leftOut = false) {
     const run = { captureId, captureFrameId, createdBy, settings, createdAt: new Date(), finishedAt: new Date() };
     const message = 'stands in for a result';
     if (end === 'measured') {
-      const result = { id: 'x', status: 'failed', reason: 'bad-case', message } as const;
+      const result = measuredResult('x');
       const { sizeUm: _size, ...measured } = measuredRun;
       return laboratory.insert(MeasurementEntity, { ...measured, flags: [], ...run, sizeUm, result });
     }

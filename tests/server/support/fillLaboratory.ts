@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import type { DataSource } from 'typeorm';
+import type { Measured } from '../../../shared/contracts/measureResult';
 import { scoped } from '../../../server/database/LaboratoryScope';
 import { ApertureEntity } from '../../../server/entities/ApertureEntity';
 import { BenchEntity } from '../../../server/entities/BenchEntity';
@@ -45,6 +46,40 @@ export const measuredRun = {
   coverageFactor: 2,
   flags: ['no-flat'],
 } as const;
+
+/** A result as the engine gives it, of one ring. */
+export const measuredResult = (id: string): Measured => ({
+  id,
+  status: 'measured',
+  pattern: 'pinhole',
+  model: 'lommel',
+  sizeUm: measuredRun.sizeUm,
+  standardUncertaintyUm: measuredRun.standardUncertaintyUm,
+  fitUncertaintyUm: measuredRun.fitUncertaintyUm,
+  expandedUncertaintyUm: measuredRun.expandedUncertaintyUm,
+  coverageFactor: measuredRun.coverageFactor,
+  effectiveDegreesOfFreedom: null,
+  axesUm: null,
+  angleDeg: null,
+  fringeScaleUm: null,
+  fringeScaleUncertaintyUm: null,
+  impliedDistanceMm: null,
+  edgePx: null,
+  beamRadiusUm: null,
+  secondMomentWidthUm: null,
+  centrePx: { x: 1, y: 0 },
+  rings: [{ order: 1, kind: 'dark', radiusMm: 1.9301, uncertaintyMm: 0.0004, predictedMm: 1.9301, sizeUm: 199.95 }],
+  ringSizeUm: 199.95,
+  ringSizeUncertaintyUm: 0.04,
+  secondOpinion: { sizeUm: null, standardUncertaintyUm: null, reason: 'one ring only' },
+  reducedChiSquare: 1.02,
+  fresnelNumber: 0.03,
+  flags: [...measuredRun.flags],
+  budget: [],
+  assumed: [],
+  engine: 'test',
+  timingsMs: { decode: 1, calibrate: 1, centre: 1, profile: 1, fit: 1, total: 5 },
+});
 
 /** Writes one row of every kind into a laboratory, past the API. */
 export async function fillLaboratory(
@@ -106,14 +141,13 @@ export async function fillLaboratory(
     noiseCounts: 2,
   });
   await database.manager.insert(FrameChunkEntity, { frameId, position: 0, bytes: Buffer.from('abcd') });
-  await laboratory.insert(RenditionEntity, {
-    frameId,
-    kind: 'plane',
-    widthPx: 2,
-    heightPx: 1,
-    encoding: 'uint16-le',
-    bytes: Buffer.from([1, 0, 2, 0]),
-  });
+  const picture = { widthPx: 2, heightPx: 1 };
+  const plane = { ...picture, kind: 'plane', encoding: 'uint16-le', bytes: Buffer.from([1, 0, 2, 0]) } as const;
+  const tone = { ...picture, kind: 'thumbnail', encoding: 'tone8', bytes: Buffer.from([1, 2]) } as const;
+  await laboratory.insertAll(RenditionEntity, [
+    { ...plane, frameId },
+    { ...tone, frameId },
+  ]);
   const captureFrameId = await laboratory.insert(CaptureFrameEntity, {
     captureId,
     frameId,
@@ -143,10 +177,12 @@ export async function fillLaboratory(
       mosaic: 'auto',
       encoding: 'auto',
     },
-    result: { id: measurementId, status: 'failed', reason: 'bad-case', message: 'stands in for a result' },
+    result: measuredResult(measurementId),
     startedAt: new Date(),
     finishedAt: new Date(),
   });
+  const misfit = { ...picture, kind: 'misfit', encoding: 'misfit8', bytes: Buffer.from([128, 0]) } as const;
+  await laboratory.insert(RenditionEntity, { ...misfit, measurementId });
   await laboratory.insert(ProfileEntity, {
     measurementId,
     radiusMm: [0, 0.1],
