@@ -36,6 +36,8 @@ import { useSheetPointers } from './useSheetPointers';
 
 const FINGER_PX = 24;
 const POINTER_PX = 12;
+/** Rest after which a moved frame is drawn from all its samples. */
+const SETTLE_MS = 140;
 const noRows: ReadonlyMap<number, number> = new Map();
 
 /** What `Sheet` shows once the drawing engine is there. */
@@ -61,6 +63,7 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
   const moved = useRef(false);
   const grip = useRef<Grip | null>(null);
   const told = useRef(0);
+  const settling = useRef<ReturnType<typeof setTimeout> | null>(null);
 
   const texture = useDisposable(useCallback(() => (plane ? new FrameTexture(plane, misfit) : null), [plane, misfit]));
   const strip = useDisposable(
@@ -115,6 +118,8 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
     () => () => {
       cancelAnimationFrame(told.current);
       told.current = 0;
+      if (settling.current !== null) clearTimeout(settling.current);
+      settling.current = null;
     },
     [],
   );
@@ -122,6 +127,12 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
   const move = (next: (now: Place) => Place) => {
     if (!place.current || !plane) return;
     moved.current = true;
+    // A moving frame is drawn from fewer samples, so that it keeps up with the hand; it is drawn whole once it rests.
+    if (settling.current !== null) clearTimeout(settling.current);
+    settling.current = setTimeout(() => {
+      settling.current = null;
+      surface.current?.invalidate();
+    }, SETTLE_MS);
     show(hold(next(place.current), layout.frame, plane.widthPx, plane.heightPx));
   };
   const middle: Point = {
@@ -244,7 +255,7 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
       theme,
       negative,
       density: PixelRatio.get(),
-      maxTaps: hasWebGl() ? 4 : 2,
+      maxTaps: settling.current !== null ? 1 : hasWebGl() ? 4 : 2,
     };
     drawSheet(pen, scene);
   };

@@ -39,6 +39,7 @@ export function ViewerDesk({ props, state }: { props: ViewerProps; state: Viewer
   const [room, setRoom] = useState({ width: 0, height: 0 });
   const [place, setPlace] = useState<Place | null>(null);
   const [pointer] = useState(createPointerStore);
+  const maskedPixels = useMemo(() => (misfit ? maskedCount(misfit) : null), [misfit]);
   const sheet = useRef<SheetHandle>(null);
   const title = `${capture.apertureSerial}, frame ${position.number}`;
   // What is still being read keeps its place from the start.
@@ -234,11 +235,7 @@ export function ViewerDesk({ props, state }: { props: ViewerProps; state: Viewer
                       <Text variant="section" level={2} style={{ marginBottom: 4 }}>
                         Layers
                       </Text>
-                      <LayersList
-                        state={state}
-                        measured={measured !== null}
-                        maskedPixels={misfit ? maskedCount(misfit) : null}
-                      />
+                      <LayersList state={state} measured={measured !== null} maskedPixels={maskedPixels} />
                     </View>
                   ) : null}
                   <View style={[plateStyle, { flex: 1.14, minWidth: 0 }]}>

@@ -26,6 +26,7 @@ import type { ViewerProps } from './ViewerProps';
 export function ViewerPhone({ props, state }: { props: ViewerProps; state: ViewerState }) {
   const { capture, frame, position, plane, misfit, measured } = props;
   const { colours } = useLook();
+  const maskedPixels = useMemo(() => (misfit ? maskedCount(misfit) : null), [misfit]);
   const [room, setRoom] = useState({ width: 0, height: 0 });
   // What is still being read keeps its place from the start.
   const coming = measured === null && props.noRings === null;
@@ -124,7 +125,7 @@ export function ViewerPhone({ props, state }: { props: ViewerProps; state: Viewe
       case 'layers':
         return (
           <View style={plate}>
-            <LayersList state={state} measured={measured !== null} maskedPixels={misfit ? maskedCount(misfit) : null} />
+            <LayersList state={state} measured={measured !== null} maskedPixels={maskedPixels} />
           </View>
         );
       case 'line':
@@ -142,8 +143,8 @@ export function ViewerPhone({ props, state }: { props: ViewerProps; state: Viewe
         return (
           <View style={[plate, { paddingHorizontal: 16, paddingVertical: 8 }]}>
             <Text variant="small">
-              {misfit
-                ? `${formatNumber(maskedCount(misfit), { places: 0 })} pixels are left out of the fit: clipped, hot, dead or beyond the fit. They are hatched.`
+              {maskedPixels !== null
+                ? `${formatNumber(maskedPixels, { places: 0 })} pixels are left out of the fit: clipped, hot, dead or beyond the fit. They are hatched.`
                 : 'This frame has no mask: it was not fitted.'}
             </Text>
           </View>

@@ -100,9 +100,9 @@ half4 main(float2 p) {
     if (own.x >= white) full = 1.0;
     if (own.y > 0.5) { good = 1.0; misfitSum = own.y - 128.0; }
   } else {
-    for (int j = 0; j < 6; j++) {
+    for (int j = 0; j < 4; j++) {
       if (float(j) >= ny) break;
-      for (int i = 0; i < 6; i++) {
+      for (int i = 0; i < 4; i++) {
         if (float(i) >= nx) break;
         float2 at = f + ex * ((float(i) + 0.5) / nx - 0.5) + ey * ((float(j) + 0.5) / ny - 0.5);
         float2 c = counts(floor(at + 0.5));
