@@ -28,7 +28,10 @@ export class StartError extends Error {}
 /** Opens the database, listens, and in the demo also takes in and sends the mails. */
 export async function startApi(config: Config, log: Logger): Promise<RunningApi> {
   const database = createDataSource(config.databaseUrl, 'ringwright-api');
-  await database.initialize();
+  await database.initialize().catch((error: unknown) => {
+    const reason = error instanceof Error ? error.message : String(error);
+    throw new StartError(`The database cannot be reached (DATABASE_URL): ${reason}`, { cause: error });
+  });
   const inbox = config.demo && config.smtpUrl === null ? await startFakeInbox() : null;
   const sender = inbox && createMailSender({ database, smtpUrl: inbox.smtpUrl, from: config.mailFrom, log });
   const app = createApp({

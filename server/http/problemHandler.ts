@@ -31,6 +31,8 @@ export const problemHandler: ErrorRequestHandler = (error: unknown, request, res
     id: String(request.id),
     ...(problem.fields && { fields: problem.fields }),
   };
+  // RFC 9110, section 15.5.2: an answer 401 says which scheme is wanted.
+  if (problem.status === 401) response.set('WWW-Authenticate', 'Bearer');
   response
     .status(problem.status)
     .set('Cache-Control', 'no-store')

@@ -130,6 +130,7 @@ test.each(closed)('%s asks who calls', async (name, endpoint) => {
   for (const token of [undefined, 'invented']) {
     const answer = await attempt(name, endpoint, ourIds, token);
     expect([name, answer.status, answer.body.type]).toEqual([name, 401, 'not-signed-in']);
+    expect(answer.headers['www-authenticate']).toBe('Bearer');
   }
 });
 
