@@ -77,6 +77,11 @@ async function endChild(child) {
   clearTimeout(timer);
 }
 
+/** Whether the launcher is ending everything. */
+function isClosing() {
+  return closing;
+}
+
 /** Ends every child that still runs, and lets no new one start. */
 async function endAllChildren() {
   closing = true;
@@ -95,4 +100,4 @@ function signalGroup(pid, signal) {
   }
 }
 
-module.exports = { startChild, runChild, endChild, endAllChildren };
+module.exports = { startChild, runChild, endChild, endAllChildren, isClosing };

@@ -1,7 +1,7 @@
 'use strict';
 const fs = require('node:fs');
 const path = require('node:path');
-const { startChild, endChild } = require('./children.js');
+const { endChild, isClosing, startChild } = require('./children.js');
 const { checkout, typeScript, typeScriptEnvironment } = require('./checkout.js');
 const { PlainError } = require('./plainError.js');
 const { say } = require('./say.js');
@@ -51,7 +51,7 @@ function startService({ name, file, env, logFolder }) {
       linked: true,
     });
     void child.ended.then(({ status, signal }) => {
-      if (!wanted) return;
+      if (!wanted || isClosing()) return;
       restarts = restarts.filter((at) => at > Date.now() - patienceMs).concat(Date.now());
       const how = signal ?? `code ${status}`;
       if (!healthy || restarts.length > restartsAllowed) {
@@ -62,7 +62,7 @@ function startService({ name, file, env, logFolder }) {
         return;
       }
       say(`The ${name} ended by itself (${how}); starting it again. Its log: ${logFile}`);
-      setTimeout(() => wanted && launch(), 1000);
+      setTimeout(() => wanted && !isClosing() && launch(), 1000);
     });
   };
   launch();
