@@ -217,6 +217,7 @@ async function announce(mode, env, local) {
     say('\nRingwright runs for the local network:');
     for (const address of networkAddresses()) say(`  https://${address}:${mode.port}`);
     say(`  ${local} (this machine)`);
+    say('\nThere are no demo people here: register your laboratory on the sign-in page.');
     if (!process.env.TLS_CERT_FILE) {
       say('\nThe certificate was made on this machine, so each browser asks once whether to trust it.');
       say(`To compare, its SHA-256 fingerprint is\n  ${fingerprint(env.TLS_CERT_FILE ?? '')}`);
