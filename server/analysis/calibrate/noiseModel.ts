@@ -124,7 +124,7 @@ function groupEdges(sorted: Float64Array): number[] {
   const n = sorted.length;
   if (n === 0) return [];
   const half = LEVELS / 2;
-  const edges = new Set<number>([sorted[0], sorted[n - 1]]);
+  const edges = new Set<number>([sorted[0], Math.max(sorted[n - 1], sorted[0] + 1)]);
   for (let k = 1; k < half; k++) {
     edges.add(sorted[Math.floor((n * k) / half)]);
     edges.add(sorted[0] + ((sorted[n - 1] - sorted[0]) * k) / half);

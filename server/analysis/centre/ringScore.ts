@@ -12,6 +12,7 @@ export function ringScore({ widthPx, heightPx, level, good }: ReducedPlane, cx: 
   const n = new Float64Array(reach);
   const sum = new Float64Array(reach);
   const squares = new Float64Array(reach);
+  const { sqrt } = Math;
   let total = 0;
   let all = 0;
   let allSquares = 0;
@@ -21,8 +22,8 @@ export function ringScore({ widthPx, heightPx, level, good }: ReducedPlane, cx: 
       const i = y * widthPx + x;
       if (good[i] === 0) continue;
       const value = level[i];
-      const place = Math.sqrt((x - cx) * (x - cx) + dy2);
-      const bin = Math.floor(place);
+      const place = sqrt((x - cx) * (x - cx) + dy2);
+      const bin = place | 0;
       const part = place - bin;
       // Shared between two rings, so that the score changes smoothly with the point.
       n[bin] += 1 - part;

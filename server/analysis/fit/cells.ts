@@ -64,6 +64,7 @@ export function gatherCells(
   const sumY = new Float64Array(total);
   const limit = Math.min(largestPx, (rings - 1) * ringWidthPx);
   const quarter = SECTORS / 4;
+  const { sqrt } = Math;
   for (let py = 0; py < heightPx; py++) {
     const dy = py - centreY;
     const dy2 = dy * dy;
@@ -72,7 +73,7 @@ export function gatherCells(
     for (let px = 0, i = py * widthPx; px < widthPx; px++, i++) {
       if (mask[i] !== 0) continue;
       const dx = px - centreX;
-      const radius = Math.sqrt(dx * dx + dy2);
+      const radius = sqrt(dx * dx + dy2);
       if (radius > limit) continue;
       const value = counts[i];
       if (test !== null) {

@@ -92,6 +92,7 @@ export function cellModel(
   const { amplitude } = values;
   const model = new Float64Array(length);
   const jacobian = new Float64Array(withJacobian ? length * COUNT : 0);
+  const { sqrt } = Math;
   for (let c = 0; c < length; c++) {
     const sx = cells.x[c] * pitchMm - shiftX;
     const sy = cells.y[c] * pitchMm - shiftY;
@@ -101,7 +102,7 @@ export function cellModel(
     const across = x * x + y * y;
     const far = across + z * z;
     const form = (mean + values.ovalCos) * x * x + (mean - values.ovalCos) * y * y + 2 * values.ovalSin * x * y;
-    const v = scale * Math.sqrt(Math.max(0, form) / far);
+    const v = scale * sqrt((form > 0 ? form : 0) / far);
     const place = v * perV;
     let row = place | 0;
     let t = place - row;
@@ -113,7 +114,7 @@ export function cellModel(
     const next = at + columns;
     const slope = table[at + 1] + t * (table[next + 1] - table[at + 1]);
     const curvature = table[at + 2] + t * (table[next + 2] - table[at + 2]);
-    const dvdr = (scale * pitchMm) / Math.sqrt(far);
+    const dvdr = (scale * pitchMm) / sqrt(far);
     const spread = 0.5 * cells.radiusVariance[c] * dvdr * dvdr * curvature;
     // Rayleigh–Sommerfeld: the field falls with cos θ and with 1/distance, so the irradiance with cos⁴ θ.
     const fall = (z * z * z * z) / (far * far);

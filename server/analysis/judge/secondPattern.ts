@@ -45,7 +45,6 @@ export function secondPattern(found: PinholeFit, noise: NoiseModel): SecondPatte
   if (best === null || !(best.value > 0)) return null;
   // A copy's core, close to a Gaussian of the Airy core's width, fitted to the misfit around it.
   let weights = 0;
-  let data = 0;
   let shape = 0;
   let cross = 0;
   let before = 0;
@@ -57,7 +56,6 @@ export function secondPattern(found: PinholeFit, noise: NoiseModel): SecondPatte
     const off = cells.mean[c] - evaluated.model[c];
     const copy = Math.exp(-((distance / (0.6 * fringePx)) ** 2) * 2.0);
     weights += weight;
-    data += weight * off;
     shape += weight * copy * copy;
     cross += weight * copy * off;
     before += weight * off * off;

@@ -29,6 +29,7 @@ export function radialProfile(frame: CalibratedFrame, centreX: number, centreY: 
   const sum = new Float64Array(bins);
   const squares = new Float64Array(bins);
   const radii = new Float64Array(bins);
+  const { sqrt } = Math;
   for (let round = 0; round < 2; round++) {
     n.fill(0);
     sum.fill(0);
@@ -39,7 +40,7 @@ export function radialProfile(frame: CalibratedFrame, centreX: number, centreY: 
       for (let x = 0, i = y * widthPx; x < widthPx; x++, i++) {
         if (mask[i] !== 0) continue;
         const dx = x - centreX;
-        const radius = Math.sqrt(dx * dx + dy2);
+        const radius = sqrt(dx * dx + dy2);
         const bin = (radius + 0.5) | 0;
         const value = counts[i];
         if (value < low[bin] || value > high[bin]) continue;

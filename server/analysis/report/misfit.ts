@@ -28,6 +28,8 @@ export function misfit(
 ): Misfit {
   const { widthPx, heightPx, counts, mask, noise } = frame;
   const bytes = new Uint8Array(widthPx * heightPx);
+  const { sqrt, round } = Math;
+  const variance = varianceAt;
   let sum = 0;
   let pixels = 0;
   let outliers = 0;
@@ -58,8 +60,8 @@ export function misfit(
     for (let i = 0; i < length; i++) {
       const at = top * widthPx + i;
       if (mask[at] !== 0) continue;
-      const off = (counts[at] - model[i]) / Math.sqrt(varianceAt(noise, model[i]));
-      const byte = 128 + Math.round(SCALE * off);
+      const off = (counts[at] - model[i]) / sqrt(variance(noise, model[i]));
+      const byte = round(128 + SCALE * off);
       bytes[at] = byte < 1 ? 1 : byte > 255 ? 255 : byte;
       if (off > 6 || off < -6) {
         outliers++;
