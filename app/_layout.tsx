@@ -2,8 +2,9 @@ import { Slot } from 'expo-router';
 import { SafeAreaProvider } from 'react-native-safe-area-context';
 import { GlobalStyle } from '@/components/ui/GlobalStyle';
 import { NoticeProvider } from '@/components/ui/NoticeProvider';
+import { WaitingForServer } from '@/components/ui/WaitingForServer';
 import { QueriesOfSession } from '@/hooks/session/QueriesOfSession';
-import { SessionProvider } from '@/hooks/session/SessionProvider';
+import { SessionProvider, useSession } from '@/hooks/session/SessionProvider';
 import { ThemeProvider } from '@/hooks/theme/ThemeProvider';
 import { useFonts } from '@/hooks/theme/useFonts';
 
@@ -17,7 +18,7 @@ export default function RootLayout() {
           <SessionProvider>
             <QueriesOfSession>
               <NoticeProvider>
-                <Slot />
+                <Screens />
               </NoticeProvider>
             </QueriesOfSession>
           </SessionProvider>
@@ -25,4 +26,12 @@ export default function RootLayout() {
       </ThemeProvider>
     </SafeAreaProvider>
   );
+}
+
+/** No screen is drawn before it is known who is signed in, so that the address is still the one that was asked for. */
+function Screens() {
+  const { state, actions } = useSession();
+  if (state.status === 'asking') return <WaitingForServer problem={null} onRetry={actions.retry} />;
+  if (state.status === 'unreachable') return <WaitingForServer problem={state.problem} onRetry={actions.retry} />;
+  return <Slot />;
 }

@@ -1,9 +1,5 @@
 import { Redirect, Slot } from 'expo-router';
-import { View } from 'react-native';
 import { LabShell } from '@/components/ui/LabShell';
-import { LoadingLine } from '@/components/ui/LoadingLine';
-import { ProblemPlate } from '@/components/ui/ProblemPlate';
-import { useLook } from '@/components/ui/useLook';
 import { useOnline } from '@/hooks/api/useOnline';
 import { useProgressEvents } from '@/hooks/events/useProgressEvents';
 import { BenchChoiceProvider } from '@/hooks/queries/chosenBench';
@@ -14,28 +10,13 @@ import { STAFF } from '@/shared/contracts/roles';
 
 /** Everything behind the sign-in: who is not signed in is sent there and comes back to the same address. */
 export default function LabLayout() {
-  const { colours } = useLook();
-  const { state, actions } = useSession();
+  const { state } = useSession();
   const address = useAddress();
   if (state.status === 'signed-out') {
     const next = state.byHand || address === '/' ? '' : `?next=${encodeURIComponent(address)}`;
     return <Redirect href={`/sign-in${next}`} />;
   }
-  if (state.status === 'asking' || state.status === 'unreachable') {
-    return (
-      <View role="main" style={{ flex: 1, backgroundColor: colours.gap, padding: 24, justifyContent: 'center' }}>
-        {state.status === 'asking' ? (
-          <LoadingLine width={180} awaited="the laboratory’s server" />
-        ) : (
-          <ProblemPlate
-            title="The laboratory’s server does not answer."
-            problem={state.problem}
-            action={{ label: 'Try again', onPress: actions.retry }}
-          />
-        )}
-      </View>
-    );
-  }
+  if (state.status !== 'signed-in') return null;
   return (
     <BenchChoiceProvider key={state.session.membership.id}>
       <SignedIn />

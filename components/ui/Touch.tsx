@@ -58,7 +58,7 @@ export function Touch({
         event.preventDefault();
       }
       onPress?.();
-      router.navigate(href);
+      router.push(href);
       return;
     }
     onPress?.();

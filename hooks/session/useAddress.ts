@@ -1,3 +1,4 @@
+import { Platform } from 'react-native';
 import { useGlobalSearchParams, usePathname, useSegments } from 'expo-router';
 
 /** The address within the application, with its query: where a person wants to be after signing in. */
@@ -13,6 +14,8 @@ export function useAddress(): string {
     if (!inPath.has(name) && typeof value === 'string') query.set(name, value);
   }
   const text = query.toString();
+  // Before the screen itself is drawn the router knows only its layout; the browser knows the whole address.
+  if (Platform.OS === 'web') return `${window.location.pathname}${window.location.search}`;
   return text ? `${path}?${text}` : path;
 }
 
