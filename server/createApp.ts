@@ -15,12 +15,20 @@ import { benchRoutes } from './features/benches/benchRoutes';
 import { createBenchService } from './features/benches/benchService';
 import { cameraRoutes } from './features/cameras/cameraRoutes';
 import { createCameraService } from './features/cameras/cameraService';
+import { captureRoutes } from './features/captures/captureRoutes';
+import { createCaptureService } from './features/captures/captureService';
 import { clientRoutes } from './features/clients/clientRoutes';
 import { createClientService } from './features/clients/clientService';
+import { eventRoutes } from './features/events/eventRoutes';
+import type { ProgressHub } from './features/events/startProgressHub';
+import { frameRoutes } from './features/frames/frameRoutes';
+import { createFrameService } from './features/frames/frameService';
 import { laserRoutes } from './features/lasers/laserRoutes';
 import { createLaserService } from './features/lasers/laserService';
 import { lotRoutes } from './features/lots/lotRoutes';
 import { createLotService } from './features/lots/lotService';
+import { measurementRoutes } from './features/measurements/measurementRoutes';
+import { createMeasurementService } from './features/measurements/measurementService';
 import { createInvitationService } from './features/people/invitationService';
 import { peopleRoutes } from './features/people/peopleRoutes';
 import { createPeopleService } from './features/people/peopleService';
@@ -39,6 +47,7 @@ import { securityHeaders } from './http/securityHeaders';
 import { webBuild } from './http/webBuild';
 import { createMailTexts } from './mail/mailTexts';
 import type { FakeInbox } from './mail/startFakeInbox';
+import { createQueue } from './worker/queue/createQueue';
 
 /** Largest JSON body, bytes; frames come by other means. */
 const MAX_JSON_BYTES = 1024 * 1024;
@@ -51,8 +60,8 @@ export interface AppDependencies {
   webDir: string | null;
   inbox: FakeInbox | null;
   demoSignIns: readonly DemoSignIn[];
-  /** Registers the endpoints that take, store and measure frames. */
-  frameFeatures: (api: Api) => void;
+  /** What happens in a laboratory, for its event streams. */
+  progress: Pick<ProgressHub, 'join'>;
   now?: () => Date;
 }
 
@@ -68,7 +77,7 @@ export interface App {
 
 /** Puts the application together from what it is given; it opens nothing by itself. */
 export function createApp(dependencies: AppDependencies): App {
-  const { config, database, log, inbox, demoSignIns, webDir, now = () => new Date() } = dependencies;
+  const { config, database, log, inbox, demoSignIns, webDir, progress, now = () => new Date() } = dependencies;
   const tokens = createAccessTokens(config.tokenSecret);
   const passwords = createPasswords(config.passwordCost);
   const mailTexts = createMailTexts(config.publicUrl);
@@ -94,7 +103,11 @@ export function createApp(dependencies: AppDependencies): App {
   lotRoutes(api, createLotService(database));
   apertureRoutes(api, createApertureService(database));
   todayRoutes(api, createTodayService({ database, now }));
-  dependencies.frameFeatures(api);
+  const queue = createQueue();
+  captureRoutes(api, database, createCaptureService({ database, queue }));
+  frameRoutes(api, createFrameService(database));
+  measurementRoutes(api, createMeasurementService({ database, queue }));
+  eventRoutes(api, progress);
 
   const app = express();
   app.disable('x-powered-by');

@@ -7,8 +7,10 @@ import type { Logger } from 'pino';
 import type { Config } from './config';
 import { createApp } from './createApp';
 import { createDataSource } from './database/createDataSource';
+import { startProgressHub } from './features/events/startProgressHub';
 import { createMailSender } from './mail/createMailSender';
 import { startFakeInbox } from './mail/startFakeInbox';
+import { StartError } from './StartError';
 
 /** Slow phones need this long for a large file, ms. */
 const REQUEST_MS = 30 * 60_000;
@@ -22,9 +24,6 @@ export interface RunningApi {
   stop(): Promise<void>;
 }
 
-/** A reason not to start that the person who starts it can do something about. */
-export class StartError extends Error {}
-
 /** Opens the database, listens, and in the demo also takes in and sends the mails. */
 export async function startApi(config: Config, log: Logger): Promise<RunningApi> {
   const database = createDataSource(config.databaseUrl, 'ringwright-api');
@@ -32,6 +31,7 @@ export async function startApi(config: Config, log: Logger): Promise<RunningApi>
     const reason = error instanceof Error ? error.message : String(error);
     throw new StartError(`The database cannot be reached (DATABASE_URL): ${reason}`, { cause: error });
   });
+  const progress = await startProgressHub({ databaseUrl: config.databaseUrl, log });
   const inbox = config.demo && config.smtpUrl === null ? await startFakeInbox() : null;
   const sender = inbox && createMailSender({ database, smtpUrl: inbox.smtpUrl, from: config.mailFrom, log });
   const app = createApp({
@@ -41,7 +41,7 @@ export async function startApi(config: Config, log: Logger): Promise<RunningApi>
     webDir: webDirOf(config, log),
     inbox,
     demoSignIns: [],
-    frameFeatures: () => undefined,
+    progress,
   });
   const server = config.tls
     ? https.createServer(
@@ -54,6 +54,7 @@ export async function startApi(config: Config, log: Logger): Promise<RunningApi>
     await listen(server, config);
   } catch (error) {
     await inbox?.stop();
+    await progress.stop();
     await database.destroy();
     throw error;
   }
@@ -73,6 +74,7 @@ export async function startApi(config: Config, log: Logger): Promise<RunningApi>
       await app.background.idle();
       await sender?.stop();
       await inbox?.stop();
+      await progress.stop();
       await database.destroy();
       log.info('api stopped');
     },

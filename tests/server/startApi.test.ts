@@ -1,7 +1,8 @@
 import http from 'node:http';
 import { pino } from 'pino';
 import { readConfig, type Config } from '../../server/config';
-import { startApi, StartError } from '../../server/startApi';
+import { StartError } from '../../server/StartError';
+import { startApi } from '../../server/startApi';
 import { createTestDatabase, type TestDatabase } from '../support/testDatabase';
 
 let testDatabase: TestDatabase;

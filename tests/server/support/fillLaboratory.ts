@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { gzipSync } from 'node:zlib';
 import type { DataSource } from 'typeorm';
 import type { Measured } from '../../../shared/contracts/measureResult';
 import { scoped } from '../../../server/database/LaboratoryScope';
@@ -142,7 +143,12 @@ export async function fillLaboratory(
   });
   await database.manager.insert(FrameChunkEntity, { frameId, position: 0, bytes: Buffer.from('abcd') });
   const picture = { widthPx: 2, heightPx: 1 };
-  const plane = { ...picture, kind: 'plane', encoding: 'uint16-le', bytes: Buffer.from([1, 0, 2, 0]) } as const;
+  const plane = {
+    ...picture,
+    kind: 'plane',
+    encoding: 'uint16-le+gzip',
+    bytes: gzipSync(Buffer.from([1, 0, 2, 1])),
+  } as const;
   const tone = { ...picture, kind: 'thumbnail', encoding: 'tone8', bytes: Buffer.from([1, 2]) } as const;
   await laboratory.insertAll(RenditionEntity, [
     { ...plane, frameId },
@@ -181,7 +187,12 @@ export async function fillLaboratory(
     startedAt: new Date(),
     finishedAt: new Date(),
   });
-  const misfit = { ...picture, kind: 'misfit', encoding: 'misfit8', bytes: Buffer.from([128, 0]) } as const;
+  const misfit = {
+    ...picture,
+    kind: 'misfit',
+    encoding: 'misfit8+gzip',
+    bytes: gzipSync(Buffer.from([128, 0])),
+  } as const;
   await laboratory.insert(RenditionEntity, { ...misfit, measurementId });
   await laboratory.insert(ProfileEntity, {
     measurementId,

@@ -2,7 +2,6 @@ import { pino } from 'pino';
 import type { DataSource } from 'typeorm';
 import { createApp, type App } from '../../../server/createApp';
 import { createDataSource } from '../../../server/database/createDataSource';
-import type { Api } from '../../../server/http/Api';
 import type { FakeInbox } from '../../../server/mail/startFakeInbox';
 import type { DemoSignIn } from '../../../server/features/welcome/knownSignIns';
 import { createTestDatabase, type TestDatabase } from '../../support/testDatabase';
@@ -19,7 +18,6 @@ export interface TestApp extends App {
 }
 
 export interface TestAppChoice {
-  frameFeatures?: (database: DataSource) => (api: Api) => void;
   rateLimitFactor?: number;
   demo?: boolean;
   demoSignIns?: readonly DemoSignIn[];
@@ -45,7 +43,7 @@ export async function startTestApp(choice: TestAppChoice = {}): Promise<TestApp>
     webDir: choice.webDir ?? null,
     inbox: choice.inbox ?? null,
     demoSignIns: choice.demoSignIns ?? [],
-    frameFeatures: choice.frameFeatures?.(database) ?? (() => undefined),
+    progress: { join: () => undefined },
     now: () => new Date(Date.now() + aheadMs),
   });
   return {
