@@ -110,7 +110,7 @@ const handColumns: readonly Column<Aperture>[] = [
       return (
         <View style={{ width: '100%', flexDirection: 'row', alignItems: 'center', gap: space.m }}>
           {row.newest?.sizeUm == null ? null : (
-            <View style={{ width: 66, alignItems: 'flex-end' }}>{sizeFigure(row)}</View>
+            <View style={{ minWidth: 78, flexShrink: 0, alignItems: 'flex-end' }}>{sizeFigure(row)}</View>
           )}
           <View style={{ flex: 1, minWidth: 0 }}>
             {gap ?? (
