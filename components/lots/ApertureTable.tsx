@@ -115,7 +115,7 @@ const handColumns: readonly Column<Aperture>[] = [
           <View style={{ flex: 1, minWidth: 0 }}>
             {gap ?? (
               <Text variant="small" lines={1}>
-                {reading.words.replace(/^(refused|failed): /, '')}
+                {reading.words.replace(/^(refused|failed): /, '').replace(/ (the|a) limit/, ' limit')}
               </Text>
             )}
           </View>
