@@ -23,7 +23,8 @@ export async function writeFrame(stream: Readable, writer: FrameWriter, hangUp: 
   };
   const stall = setTimeout(hangUp, STALL_MS);
   try {
-    for await (const piece of stream as AsyncIterable<Buffer>) {
+    // A refused file is read to its end by the caller, so that its sender gets to read why: it must stay open.
+    for await (const piece of stream.iterator({ destroyOnReturn: false }) as AsyncIterable<Buffer>) {
       stall.refresh();
       if (judged) await writer.write(piece);
       else {
