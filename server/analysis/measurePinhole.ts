@@ -1,9 +1,10 @@
 import type { MeasureCase } from '../../shared/contracts/measureCase';
 import type { Flag, Measured, RadialProfile } from '../../shared/contracts/measureResult';
+import type { Rounded } from './calibrate/rounding';
 import type { CalibratedFrame } from './calibrate/CalibratedFrame';
 import { findCentre } from './centre/findCentre';
 import { ENGINE } from './engineName';
-import { cellModel, radiusOf } from './fit/fitCells';
+import { cellModel, expectedInCell, radiusOf } from './fit/fitCells';
 import { fitPinhole, type PinholeFit } from './fit/fitPinhole';
 import { fresnelU, pinholeOptics, type PinholeOptics } from './fit/PinholeOptics';
 import { joinPrior } from './fit/posterior';
@@ -55,7 +56,11 @@ export function measurePinhole(
   watch.begin('profile');
   const { cells } = found;
   const evaluated = cellModel(cells, optics, values, false);
-  const profile = profileOfCells(cells, evaluated.model);
+  const expected: Rounded = { offset: 0, slope: 1, variance: 1 };
+  const counts = evaluated.model.map(
+    (level, c) => level + expectedInCell(found.noise, level, evaluated.blur[c], expected).offset,
+  );
+  const profile = profileOfCells(cells, counts);
   const rings = ringTable(profile, values, optics, frame.noise);
   if (rings.length === 0) {
     return {
@@ -263,6 +268,11 @@ function assumptions(
     const degrees = (radians: number) => ((radians * 180) / Math.PI).toFixed(1);
     said.push(
       `The rings are stretched as on a sensor tilted by ${degrees(tiltX)}° across and ${degrees(tiltY)}° down; the size is corrected for it.`,
+    );
+  }
+  if (found.noise.rounding !== undefined) {
+    said.push(
+      'The noise at black is under half a count, so rounding to whole counts was made part of the model. More gain or more bits would measure better.',
     );
   }
   if (unevenLight) {

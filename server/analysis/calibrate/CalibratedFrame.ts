@@ -20,6 +20,8 @@ export interface CalibratedFrame {
   /** Single bad pixels found. */
   defectCount: number;
   noise: NoiseModel;
+  /** True when counts above black plus blackCount are the whole numbers that the sensor's converter gave. */
+  wholeCounts: boolean;
   hasDarks: boolean;
   hasFlats: boolean;
   flags: Flag[];

@@ -128,6 +128,7 @@ export function calibrateFrame({ light, darks, flats, measureCase }: Calibration
     clippedFraction: usable > 0 ? clippedPixels / usable : 0,
     defectCount,
     noise,
+    wholeCounts: darks.length === 0 && flats.length === 0 && !srgb && !rendered && light.data instanceof Uint16Array,
     hasDarks: darks.length > 0,
     hasFlats: flats.length > 0,
     flags,

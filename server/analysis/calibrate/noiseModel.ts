@@ -13,6 +13,11 @@ export interface NoiseModel {
   perCount: number;
   perSquare: number;
   source: 'record' | 'frame';
+  /**
+   * Noise before rounding to whole counts, where it is so small that rounding is more than added noise; counts² at
+   * black and for each count of level.
+   */
+  rounding?: { blackCount: number; floor: number; perCount: number };
 }
 
 export function varianceAt(noise: NoiseModel, level: number): number {

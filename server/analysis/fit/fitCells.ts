@@ -1,5 +1,6 @@
 import { CholeskyDecomposition, Matrix } from 'ml-matrix';
 import { varianceAt, type NoiseModel } from '../calibrate/noiseModel';
+import { roundedAt, type Rounded } from '../calibrate/rounding';
 import { COLUMNS, hermite, LARGEST_V, pinholeTable, TABLE_STEP } from '../models/pinholeTable';
 import type { Cells } from './cells';
 import { fresnelU, type PinholeOptics } from './PinholeOptics';
@@ -42,6 +43,8 @@ export interface CellFit {
 
 export interface CellModel {
   model: Float64Array;
+  /** Variance of the model within each cell, counts². */
+  blur: Float64Array;
   /** Row-major, cells × all parameters; empty when not asked for. */
   jacobian: Float64Array;
 }
@@ -91,6 +94,7 @@ export function cellModel(
   const [cosX, cosY] = [Math.cos(values.tiltX), Math.cos(values.tiltY)];
   const { amplitude } = values;
   const model = new Float64Array(length);
+  const blur = new Float64Array(length);
   const jacobian = new Float64Array(withJacobian ? length * COUNT : 0);
   const { sqrt } = Math;
   for (let c = 0; c < length; c++) {
@@ -115,6 +119,7 @@ export function cellModel(
     const slope = table[at + 1] + t * (table[next + 1] - table[at + 1]);
     const curvature = table[at + 2] + t * (table[next + 2] - table[at + 2]);
     const dvdr = (scale * pitchMm) / sqrt(far);
+    blur[c] = (amplitude * slope * dvdr) ** 2 * cells.radiusVariance[c];
     const spread = 0.5 * cells.radiusVariance[c] * dvdr * dvdr * curvature;
     // Rayleigh–Sommerfeld: the field falls with cos θ and with 1/distance, so the irradiance with cos⁴ θ.
     const fall = (z * z * z * z) / (far * far);
@@ -142,12 +147,22 @@ export function cellModel(
     jacobian[j + 10] = steep * (keystone * sx * cosX - vx * sx * sinX);
     jacobian[j + 11] = steep * (keystone * sy * cosY - vy * sy * sinY);
   }
-  return { model, jacobian };
+  return { model, blur, jacobian };
 }
 
-/** Variance of a cell's mean under a model level. */
-function cellVariance(noise: NoiseModel, level: number, pixels: number): number {
-  return varianceAt(noise, level) / pixels;
+/** Expected mean of a cell over its level, and variance of one of its pixels. */
+export function expectedInCell(noise: NoiseModel, level: number, blur: number, into: Rounded): Rounded {
+  const { rounding } = noise;
+  if (rounding === undefined) {
+    into.offset = 0;
+    into.slope = 1;
+    into.variance = varianceAt(noise, level);
+    return into;
+  }
+  const above = level > 0 ? level : 0;
+  roundedAt(level + rounding.blackCount, rounding.floor + rounding.perCount * above + blur, into);
+  into.variance += noise.perSquare * above * above;
+  return into;
 }
 
 /**
@@ -169,7 +184,7 @@ export function fitCells(
   let iterations = 0;
   let converged = false;
   let { normal, gradient, variance } = assemble(cells, noise, evaluated, columns);
-  let cost = chiSquare(cells, evaluated.model, variance);
+  let cost = chiSquare(cells, noise, evaluated, variance);
   let damping = 0;
   while (iterations < MOST_ITERATIONS) {
     iterations++;
@@ -189,7 +204,7 @@ export function fitCells(
     const tried = { ...values };
     free.forEach((name, i) => (tried[name] += step[i]));
     const next = admissible(tried, values) ? cellModel(cells, optics, tried, true) : null;
-    const nextCost = next === null ? Infinity : chiSquare(cells, next.model, variance);
+    const nextCost = next === null ? Infinity : chiSquare(cells, noise, next, variance);
     if (!(nextCost <= cost * (1 + 1e-12) + 1e-9)) {
       damping = damping === 0 ? 1e-3 : damping * 8;
       if (damping > 1e8) break;
@@ -198,7 +213,7 @@ export function fitCells(
     values = tried;
     evaluated = next as CellModel;
     ({ normal, gradient, variance } = assemble(cells, noise, evaluated, columns));
-    cost = chiSquare(cells, evaluated.model, variance);
+    cost = chiSquare(cells, noise, evaluated, variance);
     damping = damping < 1e-4 ? 0 : damping / 10;
   }
   return {
@@ -239,26 +254,33 @@ function admissible(tried: PinholeParameters, from: PinholeParameters): boolean 
   );
 }
 
-function chiSquare(cells: Cells, model: Float64Array, variance: Float64Array): number {
+function chiSquare(cells: Cells, noise: NoiseModel, { model, blur }: CellModel, variance: Float64Array): number {
+  const expected: Rounded = { offset: 0, slope: 1, variance: 1 };
   let sum = 0;
-  for (let c = 0; c < cells.length; c++) sum += (cells.mean[c] - model[c]) ** 2 / variance[c];
+  for (let c = 0; c < cells.length; c++) {
+    const { offset } = expectedInCell(noise, model[c], blur[c], expected);
+    sum += (cells.mean[c] - model[c] - offset) ** 2 / variance[c];
+  }
   return sum;
 }
 
-function assemble(cells: Cells, noise: NoiseModel, { model, jacobian }: CellModel, columns: number[]) {
+function assemble(cells: Cells, noise: NoiseModel, { model, blur, jacobian }: CellModel, columns: number[]) {
+  const expected: Rounded = { offset: 0, slope: 1, variance: 1 };
   const p = columns.length;
   const sums = new Float64Array(p * p);
   const gradient = new Float64Array(p);
   const variance = new Float64Array(cells.length);
   for (let c = 0; c < cells.length; c++) {
-    variance[c] = cellVariance(noise, model[c], cells.pixels[c]);
+    expectedInCell(noise, model[c], blur[c], expected);
+    variance[c] = expected.variance / cells.pixels[c];
+    const steep = expected.slope;
     const weight = 1 / variance[c];
-    const off = weight * (cells.mean[c] - model[c]);
+    const off = weight * (cells.mean[c] - model[c] - expected.offset) * steep;
     const at = c * COUNT;
     for (let i = 0; i < p; i++) {
       const d = jacobian[at + columns[i]];
       gradient[i] += off * d;
-      const scaled = weight * d;
+      const scaled = weight * steep * steep * d;
       for (let j = i; j < p; j++) sums[i * p + j] += scaled * jacobian[at + columns[j]];
     }
   }

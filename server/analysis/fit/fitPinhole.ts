@@ -1,4 +1,5 @@
 import type { CalibratedFrame } from '../calibrate/CalibratedFrame';
+import type { NoiseModel } from '../calibrate/noiseModel';
 import type { FoundCentre } from '../centre/findCentre';
 import { LARGEST_V } from '../models/pinholeTable';
 import { radialProfile } from '../profile/radialProfile';
@@ -15,6 +16,7 @@ import {
 } from './fitCells';
 import type { PinholeOptics } from './PinholeOptics';
 import { pixelTest } from './pixelTest';
+import { roundingNoise } from './roundingNoise';
 import { robustCovariance, type Spread } from './robustCovariance';
 import { illuminationOf, startSizes } from './startSizes';
 
@@ -28,12 +30,16 @@ const LEAST_OVAL = 0.0015;
 const LEAST_KEYSTONE = 6e-4;
 /** Fall of chi-square by which a shape other than round must pay. */
 const LEAST_GAIN = 30;
+/** Variance at black, counts², from which on rounding is plain added noise. */
+const LEAST_SMOOTH = 0.4;
 /** Bins to the length λz/D where rings are narrow; never wider than a pixel. */
 const BINS_PER_RING = 40;
 
 export type Shape = 'round' | 'oval' | 'tilted';
 
 export interface PinholeFit {
+  /** The frame's noise, with what rounding does to it where that matters. */
+  noise: NoiseModel;
   fit: CellFit;
   cells: Cells;
   evaluated: CellModel;
@@ -69,7 +75,7 @@ function modelledPx(optics: PinholeOptics, values: PinholeParameters): number {
  * @returns null when no size explains any of the frame
  */
 export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre: FoundCentre): PinholeFit | null {
-  const { noise } = frame;
+  let { noise } = frame;
   const bins = radialProfile(frame, centre.x, centre.y);
   const start = startSizes(bins, optics, noise, furthestPx(frame.widthPx, frame.heightPx, centre.x, centre.y))[0];
   if (start === undefined) return null;
@@ -99,6 +105,14 @@ export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre
   cells = gather(test);
   if (cells.length < 50) return null;
   let fit = fitCells(cells, optics, noise, values, ROUND);
+  if (frame.wholeCounts && noise.floor < LEAST_SMOOTH) {
+    // Twice, because the noise before rounding and the pattern are found from each other.
+    for (let round = 0; round < 2; round++) {
+      const evaluated = cellModel(cells, optics, fit.values, false);
+      noise = { ...noise, rounding: roundingNoise(cells, evaluated, noise, frame.blackCount) };
+      fit = fitCells(cells, optics, noise, fit.values, ROUND);
+    }
+  }
   const roundChiSquare = fit.cellChiSquare;
   let shape: Shape = 'round';
   const reach = furthestPx(frame.widthPx, frame.heightPx, values.x, values.y) * optics.pitchMm;
@@ -123,6 +137,7 @@ export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre
   if (!centreIsSane(frame, fit.values)) return null;
   const evaluated = cellModel(cells, optics, fit.values, true);
   return {
+    noise,
     fit,
     cells,
     evaluated,

@@ -1,7 +1,8 @@
 import { Matrix } from 'ml-matrix';
-import { varianceAt, type NoiseModel } from '../calibrate/noiseModel';
+import type { NoiseModel } from '../calibrate/noiseModel';
+import type { Rounded } from '../calibrate/rounding';
 import type { Cells } from './cells';
-import { PARAMETERS, type CellFit, type CellModel } from './fitCells';
+import { expectedInCell, PARAMETERS, type CellFit, type CellModel } from './fitCells';
 
 /** Sides of the blocks over which the misfit is summed, as parts of the frame's longer side. */
 const BLOCK_PARTS = [1 / 32, 1 / 16, 1 / 9, 1 / 5];
@@ -36,7 +37,7 @@ export function robustCovariance(
   const longest = Math.max(widthPx, heightPx);
   const white = Matrix.zeros(p, p);
   const response = Matrix.zeros(p, p);
-  const whiteNoise = { ...noise, perSquare: 0 };
+  const expected: Rounded = { offset: 0, slope: 1, variance: 1 };
   const groups = BLOCK_PARTS.map((part) => ({ side: longest * part, scores: new Map<number, Float64Array>() }));
   const patches = { side: longest / 6, scores: new Map<number, Float64Array>() };
   const add = (group: { side: number; scores: Map<number, Float64Array> }, c: number, value: number) => {
@@ -50,10 +51,10 @@ export function robustCovariance(
   const d = new Float64Array(p);
   for (let c = 0; c < cells.length; c++) {
     const level = evaluated.model[c];
-    const variance = varianceAt(noise, level);
-    const weight = cells.pixels[c] / variance;
-    const shot = (weight * varianceAt(whiteNoise, level)) / variance;
-    const uneven = weight - shot;
+    const { variance, slope, offset } = expectedInCell(noise, level, evaluated.blur[c], expected);
+    const weight = (cells.pixels[c] / variance) * slope;
+    const shot = (weight * slope * (variance - noise.perSquare * Math.max(0, level) ** 2)) / variance;
+    const uneven = weight * slope - shot;
     for (let i = 0; i < p; i++) d[i] = evaluated.jacobian[c * PARAMETERS.length + columns[i]];
     for (let i = 0; i < p; i++) {
       for (let j = i; j < p; j++) {
@@ -61,9 +62,9 @@ export function robustCovariance(
         response.set(i, j, response.get(i, j) + uneven * d[i] * d[j]);
       }
     }
-    const off = weight * (cells.mean[c] - level);
+    const off = weight * (cells.mean[c] - level - offset);
     for (const group of groups) add(group, c, off);
-    add(patches, c, weight * level);
+    add(patches, c, weight * slope * level);
   }
   for (const m of [white, response]) for (let i = 0; i < p; i++) for (let j = 0; j < i; j++) m.set(i, j, m.get(j, i));
   const around = (middle: Matrix) => fit.covariance.mmul(middle).mmul(fit.covariance);

@@ -1,8 +1,8 @@
 import type { CalibratedFrame } from '../calibrate/CalibratedFrame';
-import { varianceAt } from '../calibrate/noiseModel';
+import type { Rounded } from '../calibrate/rounding';
 import type { FoundCentre } from '../centre/findCentre';
 import { reducePlane } from '../centre/reducePlane';
-import { radiusOf } from '../fit/fitCells';
+import { expectedInCell, radiusOf } from '../fit/fitCells';
 import type { PinholeFit } from '../fit/fitPinhole';
 import { illuminationOf } from '../fit/startSizes';
 import type { PinholeOptics } from '../fit/PinholeOptics';
@@ -65,7 +65,8 @@ export function judgePinhole(
   const gain = (found.flatChiSquare - fit.cellChiSquare) / perCell;
   if (gain < LEAST_GAIN) return refuse('no-pattern', NOTHING_WORDS);
 
-  const { noise } = frame;
+  const { noise } = found;
+  const expected: Rounded = { offset: 0, slope: 1, variance: 1 };
   const { values } = fit;
   let rings = 0;
   let ringsLeft = 0;
@@ -75,9 +76,10 @@ export function judgePinhole(
   for (let c = 0; c < cells.length; c++) {
     const v = (Math.PI * Math.hypot(cells.x[c], cells.y[c])) / fringePx;
     largestV = Math.max(largestV, v);
-    const variance = varianceAt(noise, evaluated.model[c]) / cells.pixels[c];
+    expectedInCell(noise, evaluated.model[c], evaluated.blur[c], expected);
+    const variance = expected.variance / cells.pixels[c];
     const signal = evaluated.model[c] - values.background - values.slopeX * cells.x[c] - values.slopeY * cells.y[c];
-    const left = (cells.mean[c] - evaluated.model[c]) ** 2 / variance - 1;
+    const left = (cells.mean[c] - evaluated.model[c] - expected.offset) ** 2 / variance - 1;
     if (v > 2.6) {
       rings += signal ** 2 / variance;
       ringsLeft += left;
@@ -88,8 +90,8 @@ export function judgePinhole(
   }
   const unexplained = rings > 0 ? Math.max(0, ringsLeft) / rings : 0;
   const coreUnexplained = core > 0 ? Math.max(0, coreLeft) / core : 0;
-  const expected = illuminationOf(optics, radiusOf(values));
-  const odd = values.illumination < -0.4 || (values.illumination > MOST_NARROW && values.illumination > 2 * expected);
+  const believed = illuminationOf(optics, radiusOf(values));
+  const odd = values.illumination < -0.4 || (values.illumination > MOST_NARROW && values.illumination > 2 * believed);
   // Unexplained light must be more than noise: several times the scatter of its own sum.
   const certain = ringsLeft > 6 * Math.sqrt(2 * cells.length);
   const bad = (unexplained > MOST_UNEXPLAINED && certain) || coreUnexplained > MOST_UNEXPLAINED_CORE || odd;
