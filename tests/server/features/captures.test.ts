@@ -8,7 +8,7 @@ import { scoped } from '../../../server/database/LaboratoryScope';
 import { FrameEntity } from '../../../server/entities/FrameEntity';
 import { MeasurementEntity } from '../../../server/entities/MeasurementEntity';
 import { call, pathOf } from '../support/call';
-import { measuredResult, measuredRun } from '../support/fillLaboratory';
+import { measuredResult } from '../support/fillLaboratory';
 import { registerLaboratory, type SignedIn } from '../support/people';
 import { addBench, addClient, addLot, laser } from '../support/records';
 import { startTestApp, type TestApp } from '../support/startTestApp';
