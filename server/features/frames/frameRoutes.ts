@@ -4,18 +4,24 @@ import { lineProfileCsv } from '../../reports/lineProfileCsv';
 import type { FrameService } from './frameService';
 import { isPacked, unpacked } from './unpacked';
 
-const fileType = { tiff: 'image/tiff', png: 'image/png', jpeg: 'image/jpeg' } as const;
+/** Ending and content type of a file, by the first word of what the inspection found it to be (`TIFF, 16-bit`). */
+const fileTypes: Record<string, { ending: string; contentType: string }> = {
+  TIFF: { ending: '.tif', contentType: 'image/tiff' },
+  PNG: { ending: '.png', contentType: 'image/png' },
+  JPEG: { ending: '.jpg', contentType: 'image/jpeg' },
+};
+const unknownType = { ending: '', contentType: undefined };
 
 export function frameRoutes(api: Api, frames: FrameService): void {
   api.registerFile(endpoints.original, async ({ actor, params }) => {
     const { frame, content } = await frames.original(actor, params.frameId);
     const { sha256, byteSize, format } = frame;
-    const known = format === 'tiff' || format === 'png' || format === 'jpeg' ? format : null;
+    const { ending, contentType } = fileTypes[format?.split(/[ ,]/)[0] ?? ''] ?? unknownType;
     return {
       content,
       byteLength: byteSize,
-      fileName: `${sha256?.slice(0, 12)}${known === null ? '' : `.${known}`}`,
-      contentType: known === null ? undefined : fileType[known],
+      fileName: `${sha256?.slice(0, 12)}${ending}`,
+      contentType,
       etag: `${sha256}`,
       immutable: true,
     };

@@ -24,6 +24,13 @@ afterAll(() => app?.stop());
 
 const params = () => ({ frameId: filled.frameId });
 
+test('a file goes out under its hash, with the ending and type of what it is', async () => {
+  const answer = await call(app, endpoints.original, { token, params: params() }).buffer(true).expect(200);
+  expect(answer.headers['content-type']).toBe('image/tiff');
+  expect(answer.headers['content-disposition']).toBe('attachment; filename=cccccccc0000.tif');
+  expect(String(answer.body)).toBe('abcd');
+});
+
 test('the decoded counts come packed or plain, with size and levels beside them', async () => {
   for (const encoding of ['gzip', 'identity']) {
     const answer = await call(app, endpoints.plane, { token, params: params() })

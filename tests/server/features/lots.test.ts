@@ -25,6 +25,8 @@ beforeEach(async () => {
 afterAll(() => app?.stop());
 
 let hashes = 0;
+/** Keeps runs of one millisecond in the order in which they were added. */
+let runs = 0;
 /** Writes a capture of an aperture with one light, past the API; returns what adds runs of that frame. */
 async function addLight(apertureId: string, leftOut = false) {
   const laboratory = scoped(app.database, manager.session.membership.laboratoryId);
@@ -37,7 +39,14 @@ async function addLight(apertureId: string, leftOut = false) {
   const captureFrameId = await laboratory.insert(CaptureFrameEntity, place);
   return (end: 'measured' | 'refused' | 'waiting', sizeUm = 200) => {
     const { settings } = measuredRun;
-    const run = { captureId, captureFrameId, createdBy, settings, createdAt: new Date(), finishedAt: new Date() };
+    const run = {
+      captureId,
+      captureFrameId,
+      createdBy,
+      settings,
+      createdAt: new Date(Date.now() + (runs += 1)),
+      finishedAt: new Date(),
+    };
     const message = 'stands in for a result';
     if (end === 'measured') {
       const result = measuredResult('x');

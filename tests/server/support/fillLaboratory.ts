@@ -130,7 +130,7 @@ export async function fillLaboratory(
     byteSize: 4,
     chunkCount: 1,
     state: 'ready',
-    format: 'tiff',
+    format: 'TIFF, 16-bit',
     widthPx: 2,
     heightPx: 1,
     bitDepth: 12,
