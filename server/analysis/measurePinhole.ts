@@ -195,6 +195,9 @@ function whyNoOpinion(
     return 'The pattern is cropped, and the transform needs all of it.';
   if (frame.step > 1) return 'A colour mosaic samples the frame too coarsely for the transform.';
   if (rendered) return 'The tone curve of a rendered frame changes the transform.';
+  if (found.second !== null && found.second.explained > 0.5 && found.second.relative > 0.003) {
+    return 'A second pattern lies in the frame, and the transform cannot tell the two apart.';
+  }
   if (found.shape !== 'round') return 'The pattern is not round, and the transform was fitted for round holes only.';
   return null;
 }

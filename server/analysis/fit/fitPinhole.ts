@@ -16,6 +16,8 @@ import {
 } from './fitCells';
 import type { PinholeOptics } from './PinholeOptics';
 import { pixelTest } from './pixelTest';
+import type { SecondPattern } from '../judge/secondPattern';
+import { withoutSecond } from './withoutSecond';
 import { roundingNoise } from './roundingNoise';
 import { robustCovariance, type Spread } from './robustCovariance';
 import { illuminationOf, startSizes } from './startSizes';
@@ -27,9 +29,11 @@ const TILTED: ParameterName[] = [...ROUND, 'tiltX', 'tiltY'];
 /** A shape is believed when the oval's axes differ by more than this, relative. */
 const LEAST_OVAL = 0.0015;
 /** A tilt is believed when it changes the scale across the pattern by more than this, relative. */
-const LEAST_KEYSTONE = 6e-4;
+const LEAST_KEYSTONE = 3e-4;
+/** Share of the misfit beyond noise that a shape must explain; else something else is wrong with the frame. */
+const LEAST_SHARE = 0.5;
 /** Fall of chi-square by which a shape other than round must pay. */
-const LEAST_GAIN = 30;
+const LEAST_GAIN = 16;
 /** Variance at black, counts², from which on rounding is plain added noise. */
 const LEAST_SMOOTH = 0.4;
 /** Bins to the length λz/D where rings are narrow; never wider than a pixel. */
@@ -45,6 +49,8 @@ export interface PinholeFit {
   evaluated: CellModel;
   spread: Spread;
   shape: Shape;
+  /** The strongest second pattern; a weak one was taken off the cells. */
+  second: SecondPattern | null;
   /** Chi-square of the round, even model over that of the model chosen, for what the shape explains. */
   roundChiSquare: number;
   /** Chi-square of a constant. */
@@ -113,6 +119,8 @@ export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre
       fit = fitCells(cells, optics, noise, fit.values, ROUND);
     }
   }
+  const separated = withoutSecond(cells, optics, noise, fit, fringePx(optics, radiusOf(fit.values)));
+  ({ fit, cells } = separated);
   const roundChiSquare = fit.cellChiSquare;
   let shape: Shape = 'round';
   const reach = furthestPx(frame.widthPx, frame.heightPx, values.x, values.y) * optics.pitchMm;
@@ -123,9 +131,12 @@ export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre
   const tilted = worthTrying(TILTED) ? fitCells(cells, optics, noise, fit.values, TILTED) : fit;
   const ovalGain = (roundChiSquare - oval.cellChiSquare) / perCell;
   const tiltGain = (roundChiSquare - tilted.cellChiSquare) / perCell;
-  const isOval = ovalGain > LEAST_GAIN && Math.hypot(oval.values.ovalCos, oval.values.ovalSin) > LEAST_OVAL;
+  const excess = (roundChiSquare - fit.cellCount) / perCell;
+  const isOval =
+    ovalGain > Math.max(LEAST_GAIN, LEAST_SHARE * excess) &&
+    Math.hypot(oval.values.ovalCos, oval.values.ovalSin) > LEAST_OVAL;
   const isTilted =
-    tiltGain > LEAST_GAIN &&
+    tiltGain > Math.max(LEAST_GAIN, LEAST_SHARE * excess) &&
     (Math.hypot(tilted.values.tiltX, tilted.values.tiltY) * reach) / optics.distanceMm > LEAST_KEYSTONE;
   if (isOval && (!isTilted || ovalGain >= tiltGain)) {
     fit = oval;
@@ -143,6 +154,7 @@ export function fitPinhole(frame: CalibratedFrame, optics: PinholeOptics, centre
     evaluated,
     spread: robustCovariance(cells, fit, evaluated, noise, frame.widthPx, frame.heightPx),
     shape,
+    second: separated.second,
     roundChiSquare,
     flatChiSquare: flatChiSquare(cells, evaluated.model, frame),
     test,

@@ -7,7 +7,7 @@ import type { PinholeFit } from '../fit/fitPinhole';
 import { illuminationOf } from '../fit/startSizes';
 import type { PinholeOptics } from '../fit/PinholeOptics';
 import type { Refusal } from './Refusal';
-import { secondPattern, type SecondPattern } from './secondPattern';
+import type { SecondPattern } from './secondPattern';
 import { straightness } from './straightness';
 
 /** Gain in chi-square below which nothing is there. */
@@ -95,7 +95,7 @@ export function judgePinhole(
   // Unexplained light must be more than noise: several times the scatter of its own sum.
   const certain = ringsLeft > 6 * Math.sqrt(2 * cells.length);
   const bad = (unexplained > MOST_UNEXPLAINED && certain) || coreUnexplained > MOST_UNEXPLAINED_CORE || odd;
-  const second = secondPattern(found, noise);
+  const { second } = found;
   if (bad) {
     if (second !== null && second.explained > 0.5 && second.relative > 0.08) {
       return refuse(

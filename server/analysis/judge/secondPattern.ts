@@ -20,7 +20,10 @@ const NEAREST = 0.8;
  * The strongest second pattern of the same size: the brightest part of the misfit, and how much of the misfit a copy of
  * the pattern there explains (profile taken from the fitted model's radial mean).
  */
-export function secondPattern(found: PinholeFit, noise: NoiseModel): SecondPattern | null {
+export function secondPattern(
+  found: Pick<PinholeFit, 'cells' | 'fit' | 'fringePx'> & { evaluated: { model: Float64Array } },
+  noise: NoiseModel,
+): SecondPattern | null {
   const { cells, evaluated, fit, fringePx } = found;
   const { amplitude } = fit.values;
   const side = Math.max(2, GRID * fringePx);
@@ -71,7 +74,11 @@ export function secondPattern(found: PinholeFit, noise: NoiseModel): SecondPatte
 }
 
 /** Largest modelled level above background over the amplitude. */
-function peakOf({ evaluated, fit, cells }: PinholeFit): number {
+function peakOf({
+  evaluated,
+  fit,
+  cells,
+}: Pick<PinholeFit, 'cells' | 'fit'> & { evaluated: { model: Float64Array } }): number {
   let peak = 0;
   for (let c = 0; c < cells.length; c++) peak = Math.max(peak, evaluated.model[c] - fit.values.background);
   return Math.max(1e-9, peak / fit.values.amplitude);

@@ -15,7 +15,7 @@ export interface Budget {
 const GLASS_INDEX = 0.01;
 const GLASS_THICKNESS = 0.05;
 /** Standard uncertainty of how squarely the sensor stands, degrees. Common practice, no source. */
-const TILT_DEG = 0.5;
+const TILT_DEG = 1;
 /** Scalar theory, obliquity and tables, relative. Common practice, no source. */
 const MODEL = 2e-5;
 /** Unknown tone curve of a rendered frame, relative. Common practice, no source. */

@@ -120,6 +120,35 @@ describe('what the engine is told', () => {
   });
 });
 
+describe('disturbed frames', () => {
+  test.each([
+    [0.01, { x: 90, y: 30 }],
+    [0.03, { x: 40, y: -50 }],
+    [0.08, { x: 90, y: 30 }],
+  ])('a reflection of %d of the peak is taken off and told', async (height, place) => {
+    const result = measuredOf(await measureSimulated({ ghost: { ...place, height } }));
+    expect(result.flags).toContain('second-pattern');
+    // Left in, it would move the size by up to a percent.
+    expect(Math.abs(result.sizeUm / 200 - 1)).toBeLessThan(0.001);
+    expect(Math.abs(result.sizeUm - 200)).toBeLessThan(3 * result.standardUncertaintyUm);
+  });
+
+  test('a sensor that stands askew by 4° is found, and the size corrected for it', async () => {
+    const result = measuredOf(await measureSimulated({ tiltDeg: 4 }));
+    expect(result.flags).toContain('tilted-sensor');
+    // Uncorrected it would be 0.12 % small (computed: τ²/4).
+    expect(Math.abs(result.sizeUm - 200)).toBeLessThan(3 * result.standardUncertaintyUm);
+    expect(Math.abs(result.sizeUm / 200 - 1)).toBeLessThan(0.0008);
+  });
+
+  test('pixels of uneven response stay within the stated uncertainty', async () => {
+    const sensor = { ...SENSOR, responseUnevenness: 0.02, responseDrift: 0.002 };
+    const result = measuredOf(await measureSimulated({ sensor }));
+    expect(warnings(result.flags)).toEqual([]);
+    expect(Math.abs(result.sizeUm - 200)).toBeLessThan(3 * result.standardUncertaintyUm);
+  });
+});
+
 describe('frames that cannot be measured', () => {
   const random = seededRandom(3);
   const frame = (value: (x: number, y: number) => number) => {
