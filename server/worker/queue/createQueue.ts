@@ -1,5 +1,5 @@
 import PgBoss from 'pg-boss';
-import type { EntityManager } from 'typeorm';
+import type { Transaction } from '../../database/Database';
 import { JOB_CHANNEL, QUEUE_SCHEMA, type JobPayload, type QueueName } from './queues';
 
 /** How jobs are put into the queue: always within the transaction that writes the row they stand for. */
@@ -8,11 +8,11 @@ export interface Queue {
    * Adds a job for a row, visible to the workers when the transaction commits. Does nothing when one for the same row
    * is waiting already.
    */
-  send(manager: EntityManager, name: QueueName, id: string): Promise<void>;
+  send(manager: Transaction, name: QueueName, id: string): Promise<void>;
 }
 
 /** Statements of the queue run on the connection, and so in the transaction, of an entity manager. */
-const onConnectionOf = (manager: EntityManager): PgBoss.Db => ({
+const onConnectionOf = (manager: Transaction): PgBoss.Db => ({
   async executeSql(text, values) {
     if (!manager.queryRunner) throw new Error('A job can only be queued within a transaction.');
     const { records } = await manager.queryRunner.query(text, values, true);
@@ -26,7 +26,13 @@ const noConnection: PgBoss.Db = {
 
 /** A queue that only sends; it holds no connection of its own. */
 export function createQueue(): Queue {
-  const boss = new PgBoss({ schema: QUEUE_SCHEMA, db: noConnection, migrate: false, supervise: false, schedule: false });
+  const boss = new PgBoss({
+    schema: QUEUE_SCHEMA,
+    db: noConnection,
+    migrate: false,
+    supervise: false,
+    schedule: false,
+  });
   return {
     async send(manager, name, id) {
       const payload: JobPayload = { id };

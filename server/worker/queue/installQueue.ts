@@ -9,14 +9,21 @@ import { QUEUE_SCHEMA, queueNames } from './queues';
  * stand for carry leases of their own, and the worker's sweep queues again what was lost.
  */
 export async function installQueue(ownerUrl: string): Promise<void> {
-  const boss = new PgBoss({ connectionString: ownerUrl, schema: QUEUE_SCHEMA, max: 2, supervise: false, schedule: false });
-  let failure: Error | null = null;
-  boss.on('error', (error) => (failure = error));
+  const boss = new PgBoss({
+    connectionString: ownerUrl,
+    schema: QUEUE_SCHEMA,
+    max: 2,
+    supervise: false,
+    schedule: false,
+  });
+  const failures: Error[] = [];
+  boss.on('error', (error) => failures.push(error));
   await boss.start();
   try {
     for (const name of queueNames) await boss.createQueue(name, { name, policy: 'short', retryLimit: 0 });
   } finally {
     await boss.stop({ graceful: false });
   }
+  const [failure] = failures;
   if (failure) throw failure;
 }

@@ -1,0 +1,4 @@
+import { runProcess } from '../runProcess';
+import { startWorker } from './startWorker';
+
+runProcess('worker', startWorker);
