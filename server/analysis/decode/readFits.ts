@@ -52,7 +52,9 @@ export function readFits(bytes: Buffer): StoredSamples {
   const zero = number('BZERO', 0);
   const scale = number('BSCALE', 1);
   const count = widthPx * heightPx;
-  const whole = scale === 1 && ((kind === 8 && zero === 0) || (kind === 16 && zero === 32_768));
+  // Signed samples without an offset hold counts too, as long as none lies below zero.
+  const signed = kind === 16 && zero === 0 && scale === 1 && !hasNegative(bytes, at, count);
+  const whole = scale === 1 && ((kind === 8 && zero === 0) || (kind === 16 && zero === 32_768) || signed);
   const data = whole ? new Uint16Array(count) : new Float32Array(count);
   for (let i = 0; i < count; i++) {
     const p = at + i * size;
@@ -83,4 +85,9 @@ export function readFits(bytes: Buffer): StoredSamples {
     rendered: false,
     notes: [],
   };
+}
+
+function hasNegative(bytes: Buffer, from: number, count: number): boolean {
+  for (let i = 0; i < count; i++) if (bytes.readInt16BE(from + 2 * i) < 0) return true;
+  return false;
 }
