@@ -278,14 +278,14 @@ function Exports({ measurement }: { measurement: MeasurementDetail }) {
   return (
     <View style={{ flexDirection: 'row', gap: space.hair }}>
       <Button
-        label="Radial profile"
+        label="Radial profile, CSV"
         icon="get"
         busy={csv.isPending && csv.variables === 'radialProfileCsv'}
         onPress={() => save('radialProfileCsv', 'radial-profile')}
         style={{ flex: 1 }}
       />
       <Button
-        label="Ring table"
+        label="Ring table, CSV"
         icon="get"
         busy={csv.isPending && csv.variables === 'ringTableCsv'}
         onPress={() => save('ringTableCsv', 'rings')}
