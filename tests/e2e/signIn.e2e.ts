@@ -20,7 +20,7 @@ describe.each(viewportNames)('sign-in on a %s', (viewport) => {
   test('the page loads without the drawing engine, without another host and without an error', async () => {
     open = await visit(browser, viewport, productUrls().url);
     await open.page.getByRole('button', { name: 'Sign in', exact: true }).waitFor();
-    await open.page.waitForLoadState('networkidle');
+    await open.page.waitForLoadState('load');
     await open.screenshot('sign-in');
     expect(open.record.requests.filter((path) => path.endsWith('.wasm'))).toEqual([]);
     expect(open.record.foreignRequests).toEqual([]);
