@@ -4,7 +4,7 @@ import path from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
 import pino from 'pino';
 import { createPool, type Pool } from '../../../server/worker/pool/createPool';
-import { JobFailure, PoolClosed } from '../../../server/worker/pool/jobFailure';
+import { type JobFailure, PoolClosed } from '../../../server/worker/pool/jobFailure';
 import type { FileSource } from '../../../server/worker/pool/warmChild';
 import type { TroublesomeJobs } from './troublesomeChild';
 

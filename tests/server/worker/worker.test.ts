@@ -1,7 +1,7 @@
 import pino from 'pino';
-import type { Measured } from '../../../shared/contracts/measureResult';
+import { stages, type Measured } from '../../../shared/contracts/measureResult';
 import type { ProgressEvent } from '../../../shared/contracts/measurements';
-import { listen } from '../../../server/database/listen';
+import { listen, type Listening } from '../../../server/database/listen';
 import { PROGRESS_CHANNEL, type ProgressNotice } from '../../../server/features/events/publishProgress';
 import { darkFile, lightFile, Workbench } from './workbench';
 
@@ -24,14 +24,19 @@ const runs = `select id, state, size_um as "sizeUm", dark_count as "darkCount", 
 const ended = (rows: RunRow[]) => rows.every((row) => !['waiting', 'measuring'].includes(row.state));
 
 let bench: Workbench;
+let listening: Listening | null = null;
 beforeEach(async () => {
   bench = await Workbench.open();
 }, 60_000);
-afterEach(() => bench.close());
+afterEach(async () => {
+  await listening?.stop();
+  listening = null;
+  await bench.close();
+});
 
 test('a frame is looked at and measured with the darks of its capture, and its stages are told', async () => {
   const events: ProgressEvent[] = [];
-  const listening = await listen({
+  listening = await listen({
     databaseUrl: bench.testDatabase.databaseUrl,
     channel: PROGRESS_CHANNEL,
     applicationName: 'ringwright-test',
@@ -56,17 +61,10 @@ test('a frame is looked at and measured with the darks of its capture, and its s
   ]);
   await bench.until('select 1', [], () => events.some((e) => e.type === 'measurement' && e.state === 'measured'), 5);
   const own = events.filter((e) => e.type === 'measurement' && e.measurementId === light.measurementId);
-  expect(own.map((e) => (e.type === 'measurement' ? (e.stage ?? e.state) : ''))).toEqual([
-    'waiting',
-    'measuring',
-    'decode',
-    'calibrate',
-    'centre',
-    'profile',
-    'fit',
-    'measured',
-  ]);
-  await listening.stop();
+  const told = own.map((e) => (e.type === 'measurement' ? (e.stage ?? e.state) : ''));
+  expect(told.slice(0, 3)).toEqual(['waiting', 'measuring', 'decode']);
+  expect(told.at(-1)).toBe('measured');
+  expect([...new Set(told)].sort()).toEqual(['measured', 'measuring', 'waiting', ...stages].sort());
   expect(await bench.end(worker, 'SIGTERM')).toBe(0);
 }, 120_000);
 
