@@ -14,21 +14,18 @@ export function runProcess(
   const main = async (): Promise<void> => {
     const config = readConfig();
     const log = createLogger(name, config.logLevel);
+    // Heard from the first moment: who is asked to stop while it starts, stops when it has started.
+    const asked = new Promise<void>((resolve) => {
+      process.once('SIGTERM', resolve);
+      process.once('SIGINT', resolve);
+    });
     const service = await start(config, log);
-    let stopping = false;
-    const stop = (): void => {
-      if (stopping) return;
-      stopping = true;
-      service.stop().then(
-        () => process.exit(0),
-        (error: unknown) => {
-          log.error({ err: error }, `${name} did not stop cleanly`);
-          process.exit(1);
-        },
-      );
-    };
-    process.on('SIGTERM', stop);
-    process.on('SIGINT', stop);
+    await asked;
+    await service.stop().catch((error: unknown) => {
+      log.error({ err: error }, `${name} did not stop cleanly`);
+      process.exit(1);
+    });
+    process.exit(0);
   };
 
   main().catch((error: unknown) => {
