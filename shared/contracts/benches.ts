@@ -26,15 +26,32 @@ export const cameraBody = z
     pixelPitchUm: positive('The pixel pitch', 'µm', 100),
     /** Standard uncertainty (k = 1). */
     pixelPitchUncertaintyUm: notNegative('The uncertainty of the pixel pitch', 'µm', 5),
-    widthPx: z.number({ error: 'Enter the width in pixels.' }).int('Whole pixels only.').min(16, 'At least 16 pixels.').max(20_000, 'At most 20 000 pixels.'),
-    heightPx: z.number({ error: 'Enter the height in pixels.' }).int('Whole pixels only.').min(16, 'At least 16 pixels.').max(20_000, 'At most 20 000 pixels.'),
-    bitDepth: z.number({ error: 'Enter the significant bits.' }).int('Whole bits only.').min(6, 'At least 6 bits.').max(16, 'At most 16 bits.'),
+    widthPx: z
+      .number({ error: 'Enter the width in pixels.' })
+      .int('Whole pixels only.')
+      .min(16, 'At least 16 pixels.')
+      .max(20_000, 'At most 20 000 pixels.'),
+    heightPx: z
+      .number({ error: 'Enter the height in pixels.' })
+      .int('Whole pixels only.')
+      .min(16, 'At least 16 pixels.')
+      .max(20_000, 'At most 20 000 pixels.'),
+    bitDepth: z
+      .number({ error: 'Enter the significant bits.' })
+      .int('Whole bits only.')
+      .min(6, 'At least 6 bits.')
+      .max(16, 'At most 16 bits.'),
     electronsPerCount: positive('The gain', 'electrons per count', 10_000).nullable().default(null),
     readNoiseElectrons: notNegative('The read noise', 'electrons', 10_000).nullable().default(null),
     blackCount: notNegative('The black level', 'counts', 65_535).nullable().default(null),
     whiteCount: positive('The white level', 'counts', 65_535).nullable().default(null),
     coverGlassMm: notNegative('The thickness of the cover glass', 'mm', 20).nullable().default(null),
-    coverGlassIndex: z.number({ error: 'Enter the refractive index.' }).min(1, 'A refractive index is at least 1.').max(3, 'A refractive index is at most 3.').nullable().default(null),
+    coverGlassIndex: z
+      .number({ error: 'Enter the refractive index.' })
+      .min(1, 'A refractive index is at least 1.')
+      .max(3, 'A refractive index is at most 3.')
+      .nullable()
+      .default(null),
     note: note.default(''),
   })
   .refine((c) => c.blackCount === null || c.whiteCount === null || c.whiteCount > c.blackCount, {
@@ -92,13 +109,77 @@ const benchParams = z.object({ benchId: id });
 
 export const benchEndpoints = {
   lasers: endpoint({ method: 'get', path: '/lasers', summary: 'Lasers', access: STAFF, answer: z.array(laserSchema) }),
-  createLaser: endpoint({ method: 'post', path: '/lasers', summary: 'Add a laser', access: MANAGER, body: laserBody, answer: laserSchema }),
-  updateLaser: endpoint({ method: 'put', path: '/lasers/:laserId', summary: 'Change a laser; measurements keep the values they used', access: MANAGER, params: laserParams, body: laserBody, answer: laserSchema }),
-  cameras: endpoint({ method: 'get', path: '/cameras', summary: 'Cameras', access: STAFF, answer: z.array(cameraSchema) }),
-  createCamera: endpoint({ method: 'post', path: '/cameras', summary: 'Add a camera', access: MANAGER, body: cameraBody, answer: cameraSchema }),
-  updateCamera: endpoint({ method: 'put', path: '/cameras/:cameraId', summary: 'Change a camera; measurements keep the values they used', access: MANAGER, params: cameraParams, body: cameraBody, answer: cameraSchema }),
-  benches: endpoint({ method: 'get', path: '/benches', summary: 'Benches with their current revision', access: STAFF, answer: z.array(benchSchema) }),
-  bench: endpoint({ method: 'get', path: '/benches/:benchId', summary: 'A bench with all its revisions, newest first', access: STAFF, params: benchParams, answer: benchDetailSchema }),
-  createBench: endpoint({ method: 'post', path: '/benches', summary: 'Add a bench with its first revision', access: MANAGER, body: benchBody, answer: benchDetailSchema }),
-  reviseBench: endpoint({ method: 'post', path: '/benches/:benchId/revisions', summary: 'Revise a bench; captures already begun keep theirs', access: MANAGER, params: benchParams, body: revisionBody, answer: benchDetailSchema }),
+  createLaser: endpoint({
+    method: 'post',
+    path: '/lasers',
+    summary: 'Add a laser',
+    access: MANAGER,
+    body: laserBody,
+    answer: laserSchema,
+  }),
+  updateLaser: endpoint({
+    method: 'put',
+    path: '/lasers/:laserId',
+    summary: 'Change a laser; measurements keep the values they used',
+    access: MANAGER,
+    params: laserParams,
+    body: laserBody,
+    answer: laserSchema,
+  }),
+  cameras: endpoint({
+    method: 'get',
+    path: '/cameras',
+    summary: 'Cameras',
+    access: STAFF,
+    answer: z.array(cameraSchema),
+  }),
+  createCamera: endpoint({
+    method: 'post',
+    path: '/cameras',
+    summary: 'Add a camera',
+    access: MANAGER,
+    body: cameraBody,
+    answer: cameraSchema,
+  }),
+  updateCamera: endpoint({
+    method: 'put',
+    path: '/cameras/:cameraId',
+    summary: 'Change a camera; measurements keep the values they used',
+    access: MANAGER,
+    params: cameraParams,
+    body: cameraBody,
+    answer: cameraSchema,
+  }),
+  benches: endpoint({
+    method: 'get',
+    path: '/benches',
+    summary: 'Benches with their current revision',
+    access: STAFF,
+    answer: z.array(benchSchema),
+  }),
+  bench: endpoint({
+    method: 'get',
+    path: '/benches/:benchId',
+    summary: 'A bench with all its revisions, newest first',
+    access: STAFF,
+    params: benchParams,
+    answer: benchDetailSchema,
+  }),
+  createBench: endpoint({
+    method: 'post',
+    path: '/benches',
+    summary: 'Add a bench with its first revision',
+    access: MANAGER,
+    body: benchBody,
+    answer: benchDetailSchema,
+  }),
+  reviseBench: endpoint({
+    method: 'post',
+    path: '/benches/:benchId/revisions',
+    summary: 'Revise a bench; captures already begun keep theirs',
+    access: MANAGER,
+    params: benchParams,
+    body: revisionBody,
+    answer: benchDetailSchema,
+  }),
 };

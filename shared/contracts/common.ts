@@ -10,11 +10,7 @@ export const sha256 = z.string().regex(/^[0-9a-f]{64}$/, 'must be 64 hexadecimal
 
 /** A text that a person types: trimmed, not empty. */
 export const shortText = (what: string, max = 80) =>
-  z
-    .string()
-    .trim()
-    .min(1, `Enter ${what}.`)
-    .max(max, `Keep ${what} within ${max} characters.`);
+  z.string().trim().min(1, `Enter ${what}.`).max(max, `Keep ${what} within ${max} characters.`);
 export const note = z.string().trim().max(2000, 'Keep the note within 2000 characters.');
 
 const midSentence = (what: string) => what.charAt(0).toLowerCase() + what.slice(1);

@@ -8,7 +8,16 @@ import { EVERYONE } from './roles';
 /** What waits for the person who asks. Empty lists where a role has nothing to do with them. */
 export const todaySchema = z.object({
   /** First aperture without a size of the lot that is due first. */
-  next: z.object({ apertureId: id, serial: z.string(), nominalSizeUm: z.number(), toleranceUm: z.number().nullable(), lotId: id, lotNumber: z.string() }).nullable(),
+  next: z
+    .object({
+      apertureId: id,
+      serial: z.string(),
+      nominalSizeUm: z.number(),
+      toleranceUm: z.number().nullable(),
+      lotId: id,
+      lotNumber: z.string(),
+    })
+    .nullable(),
   /** Waiting or measuring now. */
   running: z.number().int(),
   /** Newest runs that were refused or failed. */
@@ -22,5 +31,11 @@ export const todaySchema = z.object({
 export type Today = z.infer<typeof todaySchema>;
 
 export const todayEndpoints = {
-  today: endpoint({ method: 'get', path: '/today', summary: 'What waits for me', access: EVERYONE, answer: todaySchema }),
+  today: endpoint({
+    method: 'get',
+    path: '/today',
+    summary: 'What waits for me',
+    access: EVERYONE,
+    answer: todaySchema,
+  }),
 };

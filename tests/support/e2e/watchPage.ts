@@ -1,4 +1,7 @@
-import type { Page } from 'playwright-core';
+import type { ConsoleMessage, Page } from 'playwright-core';
+import { accountEndpoints } from '../../../shared/contracts/accounts';
+
+const refreshPath = accountEndpoints.refresh.path;
 
 /** What a page asked for and complained about, in order. */
 export interface PageRecord {
@@ -20,8 +23,13 @@ export function watchPage(page: Page, ownHost: string): PageRecord {
     else record.foreignRequests.push(request.url());
   });
   page.on('console', (message) => {
-    if (message.type() === 'error') record.errors.push(message.text());
+    if (message.type() === 'error' && !saysNobodyIsSignedIn(message)) record.errors.push(message.text());
   });
   page.on('pageerror', (error) => record.errors.push(error.stack ?? error.message));
   return record;
+}
+
+/** A page learns from a 401 of the session that nobody is signed in; the browser logs that as an error by itself. */
+function saysNobodyIsSignedIn(message: ConsoleMessage): boolean {
+  return message.location().url.endsWith(`/api${refreshPath}`) && message.text().includes('401');
 }
