@@ -91,7 +91,7 @@ describe('capture screen', () => {
   });
 
   it('offers to measure again when darks came later', async () => {
-    show(sampleCapture([sampleFrame(1)], { outdatedCount: 1, mean }));
+    show(sampleCapture([sampleFrame(1)], { outdatedCount: 1, darkCount: 5, mean }));
     fireEvent.press(await screen.findByText('Measure 1 again'));
     await waitFor(() =>
       expect(answers.mock.calls.some(([endpoint]) => endpoint.path === '/captures/:captureId/measurements')).toBe(true),

@@ -69,7 +69,17 @@ function Capture({ capture }: { capture: CaptureDetail }) {
   const uploads = useUploads(capture.id);
   const measure = useMeasureCapture(capture.id);
   const rows = useMemo(() => captureRows(capture.frames, uploads.items), [capture.frames, uploads.items]);
-  const ready = capture.frames.filter((frame) => frame.state === 'ready').map((frame) => frame.frameId);
+  // A dark has nothing to show: stretched to the eye it would only glare.
+  const pictured = capture.frames.filter((frame) => frame.state === 'ready' && frame.kind !== 'dark');
+  const ready = pictured.map((frame) => frame.frameId);
+  const outdated = capture.frames.filter(
+    ({ kind, state, leftOut, measurement }) =>
+      kind === 'light' &&
+      state === 'ready' &&
+      !leftOut &&
+      measurement?.finishedAt &&
+      measurement.darkCount < capture.darkCount,
+  ).length;
   const thumbnails = useThumbnails(ready, capture.wavelengthNm);
   const lights = lightRows(rows);
   const calibration = calibrationRows(rows);
@@ -146,7 +156,7 @@ function Capture({ capture }: { capture: CaptureDetail }) {
       />
       {canChange && !moving ? (
         <MeasureLine
-          outdatedCount={capture.outdatedCount}
+          outdatedCount={Math.min(outdated, capture.outdatedCount)}
           unmeasuredCount={unmeasured}
           busy={measure.isPending}
           onMeasure={() => measure.mutate({}, { onError: (error) => warn(error.message) })}
