@@ -7,6 +7,7 @@ import type { Logger } from 'pino';
 import type { Config } from './config';
 import { createApp } from './createApp';
 import { createDataSource } from './database/createDataSource';
+import { demoSignIns } from './demo/demoSignIns';
 import { startProgressHub } from './features/events/startProgressHub';
 import { createMailSender } from './mail/createMailSender';
 import { startFakeInbox } from './mail/startFakeInbox';
@@ -40,7 +41,7 @@ export async function startApi(config: Config, log: Logger): Promise<RunningApi>
     log,
     webDir: webDirOf(config, log),
     inbox,
-    demoSignIns: [],
+    demoSignIns,
     progress,
   });
   const server = config.tls
