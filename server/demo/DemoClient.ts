@@ -37,9 +37,7 @@ export class DemoClient {
     const path = endpoint.path.replace(/:(\w+)/g, (_all, name: string) =>
       encodeURIComponent(String((params as Record<string, unknown>)[name])),
     );
-    const search = new URLSearchParams(
-      Object.entries(query as Record<string, unknown>).map(([k, v]) => [k, String(v)]),
-    );
+    const search = new URLSearchParams(query as Record<string, string>);
     const headers: Record<string, string> = this.token === '' ? {} : { Authorization: `Bearer ${this.token}` };
     if (file === undefined && body !== undefined) headers['Content-Type'] = 'application/json';
     const response = await fetch(`${this.address}/api${path}?${search.toString()}`, {
