@@ -62,11 +62,11 @@ export function measurePinhole(
   );
   const profile = profileOfCells(cells, counts);
   const rings = ringTable(profile, values, optics, frame.noise);
-  if (rings.length === 0) {
+  if (!rings.some((ring) => ring.kind === 'dark')) {
     return {
       reason: 'too-few-rings',
       message:
-        'No single ring stands out of the noise, so nothing supports the size. Lengthen the exposure or move the camera so that more rings fall on the sensor.',
+        'No single dark ring stands out of the noise, so nothing supports the size. Lengthen the exposure or move the camera so that more rings fall on the sensor.',
     };
   }
   watch.begin('fit');

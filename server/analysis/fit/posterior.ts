@@ -58,7 +58,8 @@ export function joinPrior(found: PinholeFit, optics: PinholeOptics, hasFlats: bo
     optics.beamRadiusMm === null ? EVEN_DEVIATION : Math.max(EVEN_DEVIATION, BEAM_DEVIATION * expected);
   const variance = total(g, g);
   const off = values.illumination - expected;
-  const unevenLight = Math.abs(off) > DISAGREEMENT * Math.sqrt(variance + priorDeviation ** 2);
+  // Coarse counts imitate uneven light: then the operator's word stands.
+  const unevenLight = coarse === 1 && Math.abs(off) > DISAGREEMENT * Math.sqrt(variance + priorDeviation ** 2);
   const keep = unevenLight ? 0 : variance / (variance + priorDeviation ** 2);
   const joined = { ...values };
   free.forEach((name, i) => (joined[name] -= ((keep * total(i, g)) / variance) * off));

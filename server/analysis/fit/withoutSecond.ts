@@ -1,7 +1,8 @@
 import type { NoiseModel } from '../calibrate/noiseModel';
+import type { Rounded } from '../calibrate/rounding';
 import { secondPattern, type SecondPattern } from '../judge/secondPattern';
 import type { Cells } from './cells';
-import { cellModel, fitCells, type CellFit, type ParameterName } from './fitCells';
+import { cellModel, expectedInCell, fitCells, type CellFit, type ParameterName } from './fitCells';
 import type { PinholeOptics } from './PinholeOptics';
 
 /** A second pattern weaker than this part of the first, or that explains less of the misfit, is left alone. */
@@ -32,13 +33,18 @@ export function withoutSecond(
   start: CellFit,
   fringePx: number,
 ): Separated {
+  const rounded: Rounded = { offset: 0, slope: 1, variance: 1 };
+  const smooth = { ...noise, rounding: undefined };
   let fit = start;
   let clean = cells;
   let second: SecondPattern | null = null;
   for (let round = 0; round < ROUNDS; round++) {
     const evaluated = cellModel(cells, optics, fit.values, false);
+    const expected = evaluated.model.map(
+      (level, c) => level + expectedInCell(noise, level, evaluated.blur[c], rounded).offset,
+    );
     if (second === null) {
-      second = secondPattern({ cells, evaluated, fit, fringePx }, noise);
+      second = secondPattern({ cells, evaluated: { model: expected }, fit, fringePx }, noise);
       if (
         second === null ||
         second.explained < LEAST_EXPLAINED ||
@@ -48,13 +54,13 @@ export function withoutSecond(
         return { fit: start, cells, second };
       }
     }
-    const left = { ...cells, mean: cells.mean.map((mean, c) => mean - evaluated.model[c]) };
+    const left = { ...cells, mean: cells.mean.map((mean, c) => mean - expected[c]) };
     const near = nearby(left, second, NEAR * fringePx);
     const bare = { ...fit.values, background: 0, slopeX: 0, slopeY: 0 };
     const copy = fitCells(
       near,
       optics,
-      noise,
+      smooth,
       { ...bare, x: second.x, y: second.y, amplitude: fit.values.amplitude * second.relative },
       PLACE,
     );

@@ -25,6 +25,8 @@ const MOST_UNCERTAIN = 0.03;
 /** (a/w)² of a beam so narrow that the hole hardly shapes it. */
 const MOST_NARROW = 1.5;
 const STRAIGHT = 0.5;
+/** Counts. */
+const COARSE_LEVEL = 0.1;
 /** A second pattern stronger than this part of the first is refused. */
 const STRONG_SECOND = 0.2;
 
@@ -68,6 +70,8 @@ export function judgePinhole(
   const { noise } = found;
   const expected: Rounded = { offset: 0, slope: 1, variance: 1 };
   const { values } = fit;
+  // Where rounding rules, no level is known better than this.
+  const coarse = noise.rounding === undefined ? 0 : COARSE_LEVEL ** 2;
   let rings = 0;
   let ringsLeft = 0;
   let core = 0;
@@ -77,7 +81,7 @@ export function judgePinhole(
     const v = (Math.PI * Math.hypot(cells.x[c], cells.y[c])) / fringePx;
     largestV = Math.max(largestV, v);
     expectedInCell(noise, evaluated.model[c], evaluated.blur[c], expected);
-    const variance = expected.variance / cells.pixels[c];
+    const variance = expected.variance / cells.pixels[c] + coarse;
     const signal = evaluated.model[c] - values.background - values.slopeX * cells.x[c] - values.slopeY * cells.y[c];
     const left = (cells.mean[c] - evaluated.model[c] - expected.offset) ** 2 / variance - 1;
     if (v > 2.6) {
