@@ -13,13 +13,14 @@ export interface ClaimedMail {
 
 /**
  * Takes the mail that is due first, or null. Until `claimedUntil` no other sender takes it; if this one dies, the mail
- * is due again then. Many senders may run at once.
+ * is due again then. Many senders may run at once. `at` is whole milliseconds where the database keeps microseconds:
+ * a mail written within the millisecond of `at` is due.
  */
 export async function claimDueMail(database: Database, at: Date, claimedUntil: Date): Promise<ClaimedMail | null> {
   const [rows]: [ClaimedMail[], number] = await database.query(
     `update mail_message set attempts = attempts + 1, next_attempt_at = $2
       where id = (
-        select id from mail_message where state = 'waiting' and next_attempt_at <= $1
+        select id from mail_message where state = 'waiting' and next_attempt_at < $1::timestamptz + interval '1 millisecond'
          order by next_attempt_at, id limit 1 for update skip locked
       )
       returning id, to_address as "to", subject, body_text as text, attempts`,
