@@ -32,9 +32,10 @@ export function BenchPicker({ benches, chosenId, onChoose }: BenchPickerProps) {
             leading={<Icon name="bench" colour={chosen ? colours.ink0 : colours.ink1} />}
             title={bench.name}
             subtitle={`${asEntered(current.laser.wavelengthNm)} nm, ${asEntered(current.distanceMm)} mm, ${current.camera.name}`}
+            choice
             selected={chosen}
             onPress={() => onChoose(bench.id)}
-            label={`${bench.name}, ${asEntered(current.laser.wavelengthNm)} nm${chosen ? ', chosen' : ''}`}
+            label={`${bench.name}, ${asEntered(current.laser.wavelengthNm)} nm`}
             trailing={
               <Text variant="small" tone="ink2" lines={1}>
                 {`revision ${current.revision}`}

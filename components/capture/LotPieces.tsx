@@ -27,19 +27,20 @@ export function LotPieces({ apertures, chosenId, chosenWord, beginHref }: LotPie
           typeof newest?.sizeUm === 'number' ? formatMeasured(newest.sizeUm, newest.expandedUncertaintyUm).value : null;
         const word = size ?? (newest === null || newest.state === 'waiting' ? '' : newest.state);
         return (
-          <Row
-            key={aperture.id}
-            dense
-            leading={<StageGlyph stage={newest?.state ?? 'waiting'} />}
-            title={aperture.serial}
-            selected={chosen}
-            href={chosen ? undefined : newest ? `/measurements/${newest.measurementId}` : beginHref(aperture)}
-            trailing={
-              <Text variant="small" tone={chosen && chosenWord ? 'accent' : 'ink2'} lines={1}>
-                {chosen && chosenWord ? chosenWord : word}
-              </Text>
-            }
-          />
+          <View key={aperture.id} role="listitem">
+            <Row
+              dense
+              leading={<StageGlyph stage={newest?.state ?? 'waiting'} />}
+              title={aperture.serial}
+              selected={chosen}
+              href={chosen ? undefined : newest ? `/measurements/${newest.measurementId}` : beginHref(aperture)}
+              trailing={
+                <Text variant="small" tone={chosen && chosenWord ? 'accent' : 'ink2'} lines={1}>
+                  {chosen && chosenWord ? chosenWord : word}
+                </Text>
+              }
+            />
+          </View>
         );
       })}
     </View>

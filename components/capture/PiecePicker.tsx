@@ -45,9 +45,10 @@ export function PiecePicker({ apertures, chosenId, onChoose, search }: PiecePick
             title={aperture.serial}
             aside={desk ? nominal(aperture) : undefined}
             subtitle={desk ? undefined : `${nominal(aperture)}, lot ${aperture.lotNumber}`}
+            choice
             selected={aperture.id === chosenId}
             onPress={() => onChoose(aperture.id)}
-            label={`${aperture.serial}, ${nominal(aperture)}, lot ${aperture.lotNumber}${aperture.id === chosenId ? ', chosen' : ''}`}
+            label={`${aperture.serial}, ${nominal(aperture)}, lot ${aperture.lotNumber}`}
             trailing={
               <Text variant="small" tone="ink2" lines={1}>
                 {aperture.newest?.sizeUm

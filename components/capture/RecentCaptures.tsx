@@ -14,18 +14,19 @@ export function RecentCaptures({ captures }: { captures: readonly Capture[] }) {
   return (
     <View role="list" style={{ gap: space.hair }}>
       {captures.slice(0, 20).map((capture) => (
-        <Row
-          key={capture.id}
-          icon="capture"
-          title={capture.apertureSerial}
-          subtitle={`${formatDateTime(capture.createdAt)}, ${capture.benchName}`}
-          href={`/captures/${capture.id}`}
-          trailing={
-            <Text variant="small" tone="ink2" lines={1}>
-              {`${capture.measuredCount} of ${frames(capture.lightCount)}`}
-            </Text>
-          }
-        />
+        <View key={capture.id} role="listitem">
+          <Row
+            icon="capture"
+            title={capture.apertureSerial}
+            subtitle={`${formatDateTime(capture.createdAt)}, ${capture.benchName}`}
+            href={`/captures/${capture.id}`}
+            trailing={
+              <Text variant="small" tone="ink2" lines={1}>
+                {`${capture.measuredCount} of ${frames(capture.lightCount)}`}
+              </Text>
+            }
+          />
+        </View>
       ))}
     </View>
   );

@@ -19,8 +19,8 @@ export function illuminationWords(illumination: Illumination): string {
 }
 
 const modelNames: Record<string, string> = {
-  airy: 'Far field, round hole',
-  lommel: 'Near field, round hole',
+  airy: 'Round hole, far field',
+  lommel: 'Round hole, near and far field',
 };
 
 /** Everything the number rests on, as it was when it was measured. */
@@ -70,7 +70,7 @@ export function UsedForThis({ measurement }: { measurement: MeasurementDetail })
       <KeyValueList entries={entries} />
       {measured && measured.assumed.length > 0 ? (
         <Text variant="small" tone="ink2" style={{ marginTop: 8 }}>
-          {`Found out or assumed: ${measured.assumed.join('; ')}.`}
+          {`Found out or assumed: ${measured.assumed.join(' ')}`}
         </Text>
       ) : null}
     </Section>

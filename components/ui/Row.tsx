@@ -22,6 +22,8 @@ export interface RowProps {
   onPress?: () => void;
   /** Chosen in a list: lifted, with a bar at the left. */
   selected?: boolean;
+  /** One of a group of which one is chosen: says so to screen readers. */
+  choice?: boolean;
   /** Needs a person: stands first, on `lift`. */
   first?: boolean;
   /** 46 px on a desk in place of 64. */
@@ -42,6 +44,7 @@ export function Row({
   href,
   onPress,
   selected,
+  choice,
   first,
   dense,
   label,
@@ -105,7 +108,9 @@ export function Row({
       href={href}
       onPress={onPress}
       label={label}
-      current={selected}
+      role={choice ? 'radio' : undefined}
+      checked={choice ? selected === true : undefined}
+      current={!choice && selected}
       style={({ pressed }) => frame(pressed)}
     >
       {content}

@@ -5,7 +5,13 @@ import { toCsv } from './toCsv';
 export function radialProfileCsv(profile: RadialProfile): string {
   const { radiusMm, meanCounts, standardErrorCounts, pixelCount, modelCounts } = profile;
   return toCsv(
-    ['radius_mm', 'mean_counts', 'standard_error_counts', 'pixel_count', 'model_counts'],
+    [
+      ['radius_mm', 'mm'],
+      ['mean_counts', 'counts'],
+      ['standard_error_counts', 'counts'],
+      ['pixel_count', null],
+      ['model_counts', 'counts'],
+    ],
     radiusMm.map((radius, index) => [
       radius,
       meanCounts[index] ?? null,

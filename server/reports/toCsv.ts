@@ -1,14 +1,18 @@
 export type Cell = string | number | null;
 
+/** A column: its name, which never changes, and the unit of what stands in it; null for words and bare numbers. */
+export type Column = readonly [name: string, unit: string | null];
+
 /**
- * Comma-separated values (RFC 4180): one header row with the unit in each name, lines ended by CR LF, numbers with a
+ * Comma-separated values (RFC 4180) under two header rows, names and units; lines ended by CR LF, numbers with a
  * point and every digit they have, what does not exist left empty.
  */
-export function toCsv(header: readonly string[], rows: readonly (readonly Cell[])[]): string {
+export function toCsv(columns: readonly Column[], rows: readonly (readonly Cell[])[]): string {
   for (const row of rows) {
-    if (row.length !== header.length) throw new Error(`A row has ${row.length} cells under ${header.length} names.`);
+    if (row.length !== columns.length) throw new Error(`A row has ${row.length} cells under ${columns.length} names.`);
   }
-  return [header, ...rows].map((row) => `${row.map(quoted).join(',')}\r\n`).join('');
+  const header: Cell[][] = [columns.map(([name]) => name), columns.map(([, unit]) => unit)];
+  return [...header, ...rows].map((row) => `${row.map(quoted).join(',')}\r\n`).join('');
 }
 
 function quoted(cell: Cell): string {
