@@ -82,7 +82,8 @@ test('a line profile is read from the decoded counts, as numbers and as CSV', as
   });
   expect(csv.headers['content-type']).toBe('text/csv; charset=utf-8');
   expect(csv.text).toBe(
-    'distance_px,distance_mm,x_px,y_px,mean_counts,standard_error_counts\r\n0,0,0,0,1,\r\n1,0.005,1,0,258,\r\n',
+    'distance_px,distance_mm,x_px,y_px,mean_counts,standard_error_counts\r\npx,mm,px,px,counts,counts\r\n' +
+      '0,0,0,0,1,\r\n1,0.005,1,0,258,\r\n',
   );
 });
 
