@@ -22,7 +22,7 @@ export function BatchBar({ workingCount, keptCount, onCancelAll, onTryNow }: Bat
   const device = desk ? 'in this window' : 'on this phone';
   const words =
     keptCount > 0
-      ? `No network. ${frames(keptCount)} kept ${device}; they go out by themselves.`
+      ? `No network. ${frames(keptCount)} kept ${device}; ${keptCount === 1 ? 'it goes out by itself' : 'they go out by themselves'}.`
       : `${frames(workingCount)} on the way. Leave this page open until they have arrived.`;
   return (
     <View

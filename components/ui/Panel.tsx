@@ -93,6 +93,7 @@ export function Panel({
       ) : null}
       {scroll ? (
         <ScrollView
+          tabIndex={0}
           style={{ flex: 1, backgroundColor: colours.plate, borderRadius: radius.plate }}
           contentContainerStyle={{ flexGrow: 1, backgroundColor: colours.gap }}
           keyboardShouldPersistTaps="handled"

@@ -132,6 +132,7 @@ export function Screen({
         <ScreenHead title={title} subtitle={subtitle} back={back} action={action} level={1} />
         {scroll ? (
           <ScrollView
+            tabIndex={0}
             style={{ flex: 1 }}
             contentContainerStyle={{ gap: space.hair, paddingBottom: space.xl }}
             keyboardShouldPersistTaps="handled"

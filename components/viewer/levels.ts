@@ -29,10 +29,14 @@ export function countAt(table: Uint32Array, fraction: number): number {
   return table.length - 1;
 }
 
+/** Part of the camera's range that the fitting levels span at least: a frame without light looks dark. */
+const LEAST_SPAN = 0.03;
+
 /** From black to the brightest but one in ten thousand pixels; never narrower than 16 counts. */
 export function fittingLevels(table: Uint32Array, blackCount: number, whiteCount: number): Levels {
   const low = Math.round(Math.min(blackCount, whiteCount));
-  const high = Math.min(Math.max(countAt(table, 0.9999), low + 16), Math.max(whiteCount, low + 16));
+  const least = low + Math.max(16, Math.round(LEAST_SPAN * (whiteCount - low)));
+  const high = Math.min(Math.max(countAt(table, 0.9999), least), Math.max(whiteCount, low + 16));
   return { low, high };
 }
 

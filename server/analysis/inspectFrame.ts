@@ -18,7 +18,7 @@ export interface FrameInspection {
   health: FrameHealth;
   /** Decoded counts, row-major. */
   plane: Uint16Array;
-  /** Logarithmic tone 0 to 255, longest side 192. */
+  /** Logarithmic tone 0 to 255 from the noise upward, longest side 192. */
   thumbnailTone: { widthPx: number; heightPx: number; bytes: Uint8Array };
 }
 
@@ -39,7 +39,7 @@ export async function inspectFrame(bytes: Buffer, camera: CameraRecord): Promise
     exposureMs: decoded.exposureMs,
     health,
     plane,
-    thumbnailTone: thumbnailTone(plane, widthPx, heightPx, health.blackCount, health.peakCounts),
+    thumbnailTone: thumbnailTone(plane, widthPx, heightPx, health),
   };
 }
 
