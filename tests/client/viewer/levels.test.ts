@@ -26,9 +26,14 @@ test('the table counts each count, up to the last of 16 bits', () => {
 });
 
 test('fitting levels run from black to the brightest but one in ten thousand', () => {
-  const counts = Array.from({ length: 20_000 }, (_, i) => (i === 0 ? 4000 : 64 + (i % 100)));
-  expect(fittingLevels(countTable(planeOf(counts)), 64, 4095)).toEqual({ low: 64, high: 163 });
-  expect(fittingLevels(countTable(planeOf([64, 64])), 64, 4095)).toEqual({ low: 64, high: 80 });
+  const counts = Array.from({ length: 20_000 }, (_, i) => (i === 0 ? 4000 : 64 + (i % 300)));
+  expect(fittingLevels(countTable(planeOf(counts)), 64, 4095)).toEqual({ low: 64, high: 363 });
+});
+
+test('a frame without light stays dark: its levels span three percent of the range, and 16 counts at least', () => {
+  const dark = countTable(planeOf([64, 66, 70]));
+  expect(fittingLevels(dark, 64, 4095)).toEqual({ low: 64, high: 64 + 121 });
+  expect(fittingLevels(dark, 64, 255)).toEqual({ low: 64, high: 80 });
 });
 
 test.each(tones)('%s tone runs from 0 to 1 and has an inverse', (tone) => {
