@@ -1,6 +1,9 @@
 import besselj0 from '@stdlib/math-base-special-besselj0';
 import besselj1 from '@stdlib/math-base-special-besselj1';
 
+// Local names: looking up a global once an entry costs more than the arithmetic in some surroundings.
+const { abs, ceil, floor, max, min, sqrt } = Math;
+
 /**
  * Bessel functions of the first kind J0 … Jn of one argument.
  *
@@ -14,16 +17,16 @@ import besselj1 from '@stdlib/math-base-special-besselj1';
 export function besselSequence(x: number, out: Float64Array): void {
   const count = out.length;
   if (count === 0) return;
-  const size = Math.abs(x);
+  const size = abs(x);
   out[0] = besselj0(size);
   if (count > 1) out[1] = besselj1(size);
-  const upward = Math.min(count - 1, Math.floor(size));
+  const upward = min(count - 1, floor(size));
   for (let order = 1; order < upward; order += 1) out[order + 1] = ((2 * order) / size) * out[order] - out[order - 1];
-  if (count - 1 > Math.max(upward, 1)) {
-    const first = Math.max(upward, 1) + 1;
+  if (count - 1 > max(upward, 1)) {
+    const first = max(upward, 1) + 1;
     if (size < 1e-150) out.fill(0, first);
     else {
-      const start = count + 24 + Math.ceil(Math.sqrt(60 * count));
+      const start = count + 24 + ceil(sqrt(60 * count));
       let above = 0;
       let here = 1e-280;
       for (let order = start; order > 0; order -= 1) {
@@ -31,13 +34,13 @@ export function besselSequence(x: number, out: Float64Array): void {
         above = here;
         here = below;
         if (order - 1 < count && order - 1 >= first) out[order - 1] = here;
-        if (Math.abs(here) > 1e250) {
+        if (abs(here) > 1e250) {
           here *= 1e-250;
           above *= 1e-250;
-          for (let kept = Math.max(order - 1, first); kept < count; kept += 1) out[kept] *= 1e-250;
+          for (let kept = max(order - 1, first); kept < count; kept += 1) out[kept] *= 1e-250;
         }
       }
-      const scale = Math.abs(out[0]) > Math.abs(out[1]) ? out[0] / here : out[1] / above;
+      const scale = abs(out[0]) > abs(out[1]) ? out[0] / here : out[1] / above;
       for (let order = first; order < count; order += 1) out[order] *= scale;
     }
   }

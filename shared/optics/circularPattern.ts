@@ -2,6 +2,9 @@ import besselj0 from '@stdlib/math-base-special-besselj0';
 import besselj1 from '@stdlib/math-base-special-besselj1';
 import { besselSequence } from './besselJ';
 
+// Local names: looking up a global once an entry costs more than the arithmetic in some surroundings.
+const { abs, cbrt, ceil, cos, exp, log, max, min, sin, sqrt } = Math;
+
 /** Irradiance at one place, 1 on the axis of the far field of an evenly lit hole, with its derivatives. */
 export interface CircularPattern {
   intensity: number;
@@ -111,8 +114,8 @@ function assemble(
 export function circularPattern(u: number, taper: number, v: number): CircularPattern {
   const wRe = u;
   const wIm = -2 * taper;
-  const size = Math.hypot(wRe, wIm);
-  const place = Math.abs(v);
+  const size = sqrt(wRe * wRe + wIm * wIm);
+  const place = abs(v);
   const sign = v < 0 ? -1 : 1;
   const pattern = size < SMALL ? nearFarField(u, taper, place) : closedForm(wRe, wIm, size, place);
   pattern.byV *= sign;
@@ -122,9 +125,9 @@ export function circularPattern(u: number, taper: number, v: number): CircularPa
 function closedForm(wRe: number, wIm: number, size: number, v: number): CircularPattern {
   const square = size * size;
   // e^(−iw/2)
-  const fade = Math.exp(wIm / 2);
-  const turnRe = fade * Math.cos(wRe / 2);
-  const turnIm = -fade * Math.sin(wRe / 2);
+  const fade = exp(wIm / 2);
+  const turnRe = fade * cos(wRe / 2);
+  const turnIm = -fade * sin(wRe / 2);
   // 2/w
   const overRe = (2 * wRe) / square;
   const overIm = (-2 * wIm) / square;
@@ -135,8 +138,8 @@ function closedForm(wRe: number, wIm: number, size: number, v: number): Circular
   const qIm = (-v * wIm) / square;
 
   const ratio = size < v ? size / v : v / size;
-  const decay = ratio < 1 ? Math.ceil(-42 / Math.log(ratio)) : Infinity;
-  const count = Math.min(MAX_TERMS, Math.max(4, Math.min(decay, Math.ceil(v + 12 * Math.cbrt(v + 1) + 16))));
+  const decay = ratio < 1 ? ceil(-42 / log(ratio)) : Infinity;
+  const count = min(MAX_TERMS, max(4, min(decay, ceil(v + 12 * cbrt(v + 1) + 16))));
   const values = sequence.subarray(0, count);
   besselSequence(v, values);
 
@@ -172,9 +175,9 @@ function closedForm(wRe: number, wIm: number, size: number, v: number): Circular
       powerRe = next;
     }
     const phaseRe = (wRe + v * qRe) / 2;
-    const grow = Math.exp(-(wIm + v * qIm) / 2);
-    sumRe -= grow * Math.cos(phaseRe);
-    sumIm -= grow * Math.sin(phaseRe);
+    const grow = exp(-(wIm + v * qIm) / 2);
+    sumRe -= grow * cos(phaseRe);
+    sumIm -= grow * sin(phaseRe);
     const swapped = sumRe;
     sumRe = -sumIm;
     sumIm = swapped;

@@ -6,10 +6,10 @@
  */
 export function opticalDistanceMm(
   distanceMm: number,
-  coverGlassMm: number | null = null,
-  coverGlassIndex: number | null = null,
+  coverGlassMm?: number | null,
+  coverGlassIndex?: number | null,
 ): number {
-  if (coverGlassMm === null || coverGlassIndex === null) return distanceMm;
+  if (typeof coverGlassMm !== 'number' || typeof coverGlassIndex !== 'number') return distanceMm;
   return distanceMm - coverGlassMm * (1 - 1 / coverGlassIndex);
 }
 

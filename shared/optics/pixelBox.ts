@@ -8,24 +8,30 @@
  * @returns a new array of the same length; the last four entries repeat what can be known there
  */
 export function pixelBoxed(values: Float64Array, step: number, widthV: number): Float64Array {
-  const once = laplacian(values, step);
-  const twice = laplacian(once, step);
+  const once = radialLaplacian(values, step);
+  const twice = radialLaplacian(once, step);
   const second = widthV ** 2 / 24;
   const fourth = (7 * widthV ** 4) / 11_520;
   return values.map((value, index) => value + second * once[index] + fourth * twice[index]);
 }
 
-/** ∂²f/∂r² + (1/r) ∂f/∂r of an even function on an even grid from 0, by five-point differences. */
-function laplacian(f: Float64Array, step: number): Float64Array {
+/**
+ * ∂²f/∂r² + (1/r) ∂f/∂r of an even function on an even grid from 0, by five-point differences.
+ *
+ * @param f at least five values; the last two results repeat the one before them
+ */
+export function radialLaplacian(f: Float64Array, step: number): Float64Array {
   const last = f.length - 1;
-  const at = (index: number) => f[Math.min(last, Math.abs(index))];
-  return f.map((_, index) => {
-    const centre = Math.min(index, last - 2);
-    const second =
-      (-at(centre - 2) + 16 * at(centre - 1) - 30 * at(centre) + 16 * at(centre + 1) - at(centre + 2)) /
-      (12 * step * step);
-    if (index === 0) return 2 * second;
-    const first = (at(centre - 2) - 8 * at(centre - 1) + 8 * at(centre + 1) - at(centre + 2)) / (12 * step);
-    return second + first / (centre * step);
-  });
+  const result = new Float64Array(f.length);
+  const perSecond = 1 / (12 * step * step);
+  for (let index = 0; index <= last - 2; index += 1) {
+    // Even about 0: f(−1) = f(1), f(−2) = f(2).
+    const before = f[index > 0 ? index - 1 : 1];
+    const beforeThat = f[index > 1 ? index - 2 : 2 - index];
+    const second = 16 * (before + f[index + 1]) - 30 * f[index] - beforeThat - f[index + 2];
+    const first = 8 * (f[index + 1] - before) + beforeThat - f[index + 2];
+    result[index] = perSecond * (index === 0 ? 2 * second : second + first / index);
+  }
+  result.fill(result[last - 2], last - 1);
+  return result;
 }

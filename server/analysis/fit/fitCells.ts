@@ -1,4 +1,5 @@
 import { CholeskyDecomposition, Matrix } from 'ml-matrix';
+import { invertScaled } from '../../../shared/metrology/normalEquations';
 import { varianceAt, type NoiseModel } from '../calibrate/noiseModel';
 import { roundedAt, type Rounded } from '../calibrate/rounding';
 import { COLUMNS, hermite, LARGEST_V, pinholeTable, TABLE_STEP } from '../models/pinholeTable';
@@ -289,7 +290,7 @@ function assemble(cells: Cells, noise: NoiseModel, { model, blur, jacobian }: Ce
   return { normal, gradient, variance };
 }
 
-function scaledCholesky(normal: Matrix, damping: number) {
+function solveScaled(normal: Matrix, gradient: Float64Array, damping: number): Float64Array | null {
   const p = normal.rows;
   const scale = Array.from({ length: p }, (_, i) => 1 / Math.sqrt(normal.get(i, i)));
   if (!scale.every(Number.isFinite)) return null;
@@ -297,22 +298,7 @@ function scaledCholesky(normal: Matrix, damping: number) {
   for (let i = 0; i < p; i++)
     for (let j = 0; j < p; j++) scaled.set(i, j, normal.get(i, j) * (scale[i] * scale[j]) + (i === j ? damping : 0));
   const cholesky = new CholeskyDecomposition(scaled);
-  return cholesky.isPositiveDefinite() ? { cholesky, scale } : null;
-}
-
-function solveScaled(normal: Matrix, gradient: Float64Array, damping: number): Float64Array | null {
-  const made = scaledCholesky(normal, damping);
-  if (made === null) return null;
-  const solved = made.cholesky.solve(Matrix.columnVector(Array.from(gradient, (g, i) => g * made.scale[i])));
-  return Float64Array.from(made.scale, (s, i) => s * solved.get(i, 0));
-}
-
-/** Inverse of the normal matrix, scaled first; null when it has none. */
-export function invertScaled(normal: Matrix): Matrix | null {
-  const made = scaledCholesky(normal, 0);
-  if (made === null) return null;
-  const inverse = made.cholesky.solve(Matrix.eye(normal.rows));
-  for (let i = 0; i < normal.rows; i++)
-    for (let j = 0; j < normal.rows; j++) inverse.set(i, j, inverse.get(i, j) * (made.scale[i] * made.scale[j]));
-  return inverse;
+  if (!cholesky.isPositiveDefinite()) return null;
+  const solved = cholesky.solve(Matrix.columnVector(Array.from(gradient, (g, i) => g * scale[i])));
+  return Float64Array.from(scale, (s, i) => s * solved.get(i, 0));
 }

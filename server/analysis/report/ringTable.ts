@@ -1,17 +1,13 @@
-import { inverse as inverseOf, Matrix } from 'ml-matrix';
+import { Matrix } from 'ml-matrix';
 import type { Ring } from '../../../shared/contracts/measureResult';
+import { invertScaled } from '../../../shared/metrology/normalEquations';
+import { AIRY_DARK_V } from '../../../shared/optics/airy';
 import { varianceAt, type NoiseModel } from '../calibrate/noiseModel';
 import { radiusOf, type PinholeParameters } from '../fit/fitCells';
 import { fresnelU, reducedRadius, type PinholeOptics } from '../fit/PinholeOptics';
 import { COLUMNS, LARGEST_V, pinholeTable, TABLE_STEP } from '../models/pinholeTable';
 import type { FittedProfile } from '../profile/profileOfCells';
 
-/** Zeros of J1: dark rings of an evenly lit hole (Abramowitz & Stegun table 9.5, from memory; computed). */
-const DARK_ZEROS = Array.from({ length: 32 }, (_, i) => {
-  const b = (i + 1.25) * Math.PI;
-  // McMahon's expansion, A&S 9.5.12, for order 1 (µ = 4).
-  return b - 3 / (8 * b) + 36 / (3 * (8 * b) ** 3) - 113_184 / (15 * (8 * b) ** 5);
-});
 /** Half the window in which a ring is measured, as part of λz/D. */
 const WINDOW = 0.3;
 const DEGREE = 4;
@@ -36,11 +32,11 @@ function modelExtrema(table: Float64Array): Extremum[] {
     const v = (row + a / (a - b)) * TABLE_STEP;
     const kind = a < 0 ? 'dark' : 'bright';
     // Dark rings by the nearest zero of J1; a bright ring follows the dark ring of its order.
-    const beneath = DARK_ZEROS.filter((z) => z < v).length;
+    const beneath = AIRY_DARK_V.filter((z) => z < v).length;
     const order =
       kind === 'bright'
         ? beneath
-        : beneath > 0 && (beneath >= DARK_ZEROS.length || v - DARK_ZEROS[beneath - 1] < DARK_ZEROS[beneath] - v)
+        : beneath > 0 && (beneath >= AIRY_DARK_V.length || v - AIRY_DARK_V[beneath - 1] < AIRY_DARK_V[beneath] - v)
           ? beneath
           : beneath + 1;
     if (order >= 1) found.push({ v, kind, order });
@@ -132,12 +128,8 @@ function quarticExtremum(
     target.set(k, 0, counts[bin] / deviation);
   }
   const normal = design.transpose().mmul(design);
-  let inverse: Matrix;
-  try {
-    inverse = invert(normal);
-  } catch {
-    return null;
-  }
+  const inverse = invertScaled(normal);
+  if (inverse === null) return null;
   const c = inverse.mmul(design.transpose().mmul(target)).to1DArray();
   const residual = Matrix.sub(target, design.mmul(Matrix.columnVector(c))).to1DArray();
   const reduced = residual.reduce((s, r) => s + r * r, 0) / Math.max(1, count - DEGREE - 1);
@@ -162,18 +154,6 @@ function quarticExtremum(
     curvature: bend,
     curvatureDeviation: spread(byBend),
   };
-}
-
-function invert(normal: Matrix): Matrix {
-  const scale = Array.from({ length: normal.rows }, (_, i) => 1 / Math.sqrt(normal.get(i, i)));
-  if (!scale.every(Number.isFinite)) throw new RangeError('The window holds too few places.');
-  const scaled = new Matrix(normal.rows, normal.rows);
-  for (let i = 0; i < normal.rows; i++)
-    for (let j = 0; j < normal.rows; j++) scaled.set(i, j, normal.get(i, j) * (scale[i] * scale[j]));
-  const inverse = inverseOf(scaled);
-  for (let i = 0; i < normal.rows; i++)
-    for (let j = 0; j < normal.rows; j++) inverse.set(i, j, inverse.get(i, j) * (scale[i] * scale[j]));
-  return inverse;
 }
 
 /** Size from the dark rings together; each counts by its own uncertainty. Null without dark rings. */
