@@ -1,5 +1,6 @@
 import type { MeasureCase } from '../../shared/contracts/measureCase';
 import type { Flag, Measured, RadialProfile } from '../../shared/contracts/measureResult';
+import { NEAR_FIELD_FRESNEL_NUMBER } from '../../shared/optics/fresnelNumber';
 import type { Rounded } from './calibrate/rounding';
 import type { CalibratedFrame } from './calibrate/CalibratedFrame';
 import { findCentre } from './centre/findCentre';
@@ -23,8 +24,6 @@ export interface PinholeMeasurement {
   misfit: Misfit;
 }
 
-/** Fresnel number beyond which the plain far-field pattern is off by more than 0.03 %. */
-const NEAR_FIELD = 0.04;
 /** Uncertainty of the fit, relative, beyond which the light was low. */
 const LOW_SIGNAL = 0.0005;
 /** Standard deviations by which two opinions must differ to be flagged. */
@@ -218,7 +217,7 @@ function flagsOf(frame: CalibratedFrame, found: PinholeFit, judgement: PinholeJu
   const firstDarkPx = (FIRST_DARK / Math.PI) * found.fringePx;
   if (frame.clippedFraction > 1e-4) flags.add('clipped-core');
   if (isCropped(frame, inputs.x, inputs.y, firstDarkPx)) flags.add('cropped');
-  if (inputs.fresnelNumber > NEAR_FIELD) flags.add('near-field');
+  if (inputs.fresnelNumber >= NEAR_FIELD_FRESNEL_NUMBER) flags.add('near-field');
   if (inputs.lowSignal) flags.add('low-signal');
   if (inputs.noOpinion) flags.add('no-second-opinion');
   if (found.shape === 'oval') flags.add('out-of-round');

@@ -1,5 +1,6 @@
 import { formatQuantity } from '@/shared/units/format';
 import { warningFlags, type BudgetLine, type BudgetSource, type Flag } from '@/shared/contracts/measureResult';
+import { NEAR_FIELD_FRESNEL_NUMBER } from '@/shared/optics/fresnelNumber';
 
 export interface FlagWords {
   name: string;
@@ -19,7 +20,7 @@ const words: Record<Flag, FlagWords> = {
   cropped: { name: 'Pattern cropped', means: 'Part of the pattern lies beyond the edge of the sensor.', source: null },
   'near-field': {
     name: 'Near field',
-    means: 'The sensor is near enough that the pattern is not yet that of the far field.',
+    means: `At a Fresnel number of ${NEAR_FIELD_FRESNEL_NUMBER} or more the first dark ring no longer goes dark. The model includes this.`,
     source: 'model',
   },
   'camera-rendered': {

@@ -1,6 +1,7 @@
 import { airyIntensity, airyDerivative, AIRY_DARK_V } from '../../../shared/optics/airy';
 import { besselJ } from '../../../shared/optics/besselJ';
 import { circularPattern, tabulateCircularPattern } from '../../../shared/optics/circularPattern';
+import { NEAR_FIELD_FRESNEL_NUMBER } from '../../../shared/optics/fresnelNumber';
 import { fresnelCircleIrradiance, lommelFunctions } from '../../../shared/optics/lommel';
 import { findMinimum } from './findExtremum';
 
@@ -211,4 +212,15 @@ describe('circularPattern', () => {
       expect(Math.abs(100 * (place / dark - 1) - shift)).toBeLessThan(lastDigit);
     });
   });
+});
+
+test('from the near-field Fresnel number on the first dark ring is filled to 6.6 % of the bright ring beside it (computed)', () => {
+  const floorOverRing = (fresnel: number) => {
+    const at = (v: number) => circularPattern(2 * Math.PI * fresnel, 0, v).intensity;
+    const among = (from: number, to: number) =>
+      Array.from({ length: 200 }, (_, k) => at(from + ((to - from) * k) / 200));
+    return Math.min(...among(3.2, 4.6)) / Math.max(...among(4.6, 6));
+  };
+  expect(floorOverRing(NEAR_FIELD_FRESNEL_NUMBER)).toBeCloseTo(0.066, 3);
+  expect(floorOverRing(0.04)).toBeCloseTo(0.0108, 3);
 });
