@@ -7,6 +7,11 @@ import { decodeFrame } from './decode/decodeFrame';
 import type { DecodedFrame } from './decode/DecodedFrame';
 import { thumbnailTone } from './thumbnailTone';
 
+/** Part of the range that a guessed black level lies in: a frame that is bright all over does not show its black. */
+const HIGHEST_BLACK = 1 / 8;
+/** Standard deviations of a pixel by which the darkest fiftieth lies under black, between a dark (2.1) and a pattern. */
+const BLACK_RISE = 1.7;
+
 type FrameHealth = z.infer<typeof frameHealthSchema>;
 
 export interface FrameInspection {
@@ -71,7 +76,15 @@ function frameHealth(decoded: DecodedFrame, plane: Uint16Array, camera: CameraRe
   };
   const nominal = camera.whiteCount ?? decoded.whiteCount ?? 2 ** Math.min(16, decoded.bitDepth) - 1;
   const { clipCount } = clipLevel(plane, nominal);
-  const blackCount = camera.blackCount ?? decoded.blackCount ?? level(0.02);
+  const noiseCounts = quietNoise(
+    plane,
+    decoded.widthPx,
+    decoded.heightPx,
+    level(0.25),
+    decoded.mosaic === null ? 1 : 2,
+  );
+  const darkest = Math.min(level(0.02) + BLACK_RISE * noiseCounts, HIGHEST_BLACK * clipCount);
+  const blackCount = camera.blackCount ?? decoded.blackCount ?? darkest;
   const peakCounts = Math.max(0, level(0.9999) - blackCount);
   let clipped = 0;
   for (let v = Math.ceil(clipCount); v < histogram.length; v++) clipped += histogram[v];
@@ -81,7 +94,7 @@ function frameHealth(decoded: DecodedFrame, plane: Uint16Array, camera: CameraRe
     peakCounts,
     peakFraction: Math.min(1, peakCounts / Math.max(1, clipCount - blackCount)),
     clippedFraction: clipped / plane.length,
-    noiseCounts: quietNoise(plane, decoded.widthPx, decoded.heightPx, level(0.25), decoded.mosaic === null ? 1 : 2),
+    noiseCounts,
   };
 }
 
