@@ -151,14 +151,14 @@ function readPacked(bytes: Buffer, directory: TiffDirectory, littleEndian: boole
   };
 }
 
-/** Every strip or tile must lie inside the file. */
+/** Every strip or tile must hold bytes and lie inside the file. */
 function checkStrips(bytes: Buffer, directory: TiffDirectory): void {
   const offsets = directory.numbers.get(273) ?? directory.numbers.get(324) ?? [];
   const lengths = directory.numbers.get(279) ?? directory.numbers.get(325) ?? [];
   const good =
     offsets.length > 0 &&
     offsets.length === lengths.length &&
-    offsets.every((o, i) => o + (lengths[i] ?? 0) <= bytes.length);
+    lengths.every((length, i) => length > 0 && (offsets[i] ?? Infinity) + length <= bytes.length);
   if (!good) throw new FrameProblem('unreadable', 'The pixels lie outside the file; it seems cut off. Send it again.');
 }
 
