@@ -30,7 +30,9 @@ export interface ApertureFilter {
 export const MAX_APERTURES = 1000;
 
 /**
- * The newest run of each frame that is not left out (`run`), and of those the newest per aperture (`newest`).
+ * The newest run of each frame that is not left out (`run`), and of those the newest per aperture (`newest`): a run
+ * that was refused or failed stands for its aperture only where no other does, so that a later bad frame does not hide
+ * a size.
  * To be put before a statement whose $1 is the laboratory.
  */
 export const newestRuns = `
@@ -43,7 +45,7 @@ export const newestRuns = `
      where m.laboratory_id = $1
      order by m.capture_frame_id, m.created_at desc, m.id desc
   ), newest as (
-    select distinct on (aperture_id) * from run order by aperture_id, created_at desc, id desc
+    select distinct on (aperture_id) * from run order by aperture_id, state in ('refused', 'failed'), created_at desc, id desc
   )`;
 
 const statement = `${newestRuns}

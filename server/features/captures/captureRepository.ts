@@ -7,6 +7,7 @@ import { BenchRevisionEntity } from '../../entities/BenchRevisionEntity';
 import { CaptureEntity } from '../../entities/CaptureEntity';
 import { CaptureFrameEntity } from '../../entities/CaptureFrameEntity';
 import { FrameEntity, type StoredFrameState } from '../../entities/FrameEntity';
+import { MeasurementEntity } from '../../entities/MeasurementEntity';
 
 /** A capture with what it is of, as lists show it. */
 export interface CaptureRow {
@@ -184,15 +185,18 @@ export interface LightRow {
   state: MeasurementState | null;
   settings: MeasurementSettings | null;
   darkCount: number | null;
+  /** Why the newest run has no size. */
+  reason: string | null;
 }
 
 const lightStatement = `
   select place.id as "captureFrameId", place.frame_id as "frameId", place.left_out as "leftOut",
-    frame.state as "frameState", newest.state, newest.settings, newest.dark_count as "darkCount"
+    frame.state as "frameState", newest.state, newest.settings, newest.dark_count as "darkCount",
+    newest.reason
   from capture_frame place
   join frame on frame.id = place.frame_id
   left join lateral (
-    select m.state, m.settings, m.dark_count from measurement m
+    select m.state, m.settings, m.dark_count, m.reason from measurement m
     where m.capture_frame_id = place.id order by m.created_at desc, m.id desc limit 1
   ) newest on true
   where place.laboratory_id = $1 and place.capture_id = $2 and place.kind = 'light'
@@ -201,4 +205,13 @@ const lightStatement = `
 /** The lights of a capture, each with its newest run. */
 export function readLights(laboratory: LaboratoryScope, captureId: string): Promise<LightRow[]> {
   return laboratory.query(lightStatement, [captureId]);
+}
+
+/** Keys of the runs of a capture that have not begun, in the order in which they were asked for. */
+export async function readWaitingRuns(laboratory: LaboratoryScope, captureId: string): Promise<string[]> {
+  const runs = await laboratory.find(MeasurementEntity, {
+    where: { captureId, state: 'waiting' },
+    order: { createdAt: 'ASC' },
+  });
+  return runs.map((run) => run.id);
 }

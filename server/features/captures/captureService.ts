@@ -32,9 +32,10 @@ import {
   readLights,
   readPlaces,
   readSizes,
+  readWaitingRuns,
   type CaptureFilter,
 } from './captureRepository';
-import { isOutdated, lightsToMeasure } from './lightsToMeasure';
+import { isOutdated, lightsToMeasure, wantsFirstRun } from './lightsToMeasure';
 import { presentCapture, presentMean, presentPlace } from './presentCapture';
 
 export interface CaptureDependencies {
@@ -171,7 +172,10 @@ export function createCaptureService({ database, queue }: CaptureDependencies) {
         return [...missing];
       }),
 
-    /** Changes what a frame is, or leaves it out. What becomes a light without a run gets its first one. */
+    /**
+     * Changes what a frame is, or leaves it out. What becomes a light without a run gets its first one. Runs that
+     * waited for the frame to be looked at may have nothing to wait for now: they are queued.
+     */
     updatePlace: (
       actor: Actor,
       captureId: string,
@@ -181,12 +185,17 @@ export function createCaptureService({ database, queue }: CaptureDependencies) {
       inLaboratory(database, actor.laboratoryId, async (laboratory, transaction) => {
         found(await lockCapture(laboratory, captureId), 'capture');
         await changePlace(laboratory, captureId, placeId, change);
-        const { frameId } = await onePlace(laboratory, captureId, placeId);
+        const { frameId, state } = await onePlace(laboratory, captureId, placeId);
         const light = (await readLights(laboratory, captureId)).find((each) => each.captureFrameId === placeId);
-        if (light !== undefined && !light.leftOut && light.state === null) {
+        if (light !== undefined && wantsFirstRun(light)) {
           const settings = await defaultSettings(laboratory, captureId);
           const run = { captureId, captureFrameId: placeId, frameId, settings, createdBy: actor.userId };
           await addRun(laboratory, transaction, queue, run);
+        }
+        if (state === 'stored') {
+          for (const id of await readWaitingRuns(laboratory, captureId)) {
+            await queue.send(transaction, 'run-measurement', id);
+          }
         }
         await publishProgress(transaction, actor.laboratoryId, [
           { type: 'frame', captureId, captureFrameId: placeId, frameId, state: 'changed' },

@@ -10,14 +10,25 @@ export interface LightToMeasure {
 
 const ended = ({ state }: LightRow): boolean => state === 'measured' || state === 'refused' || state === 'failed';
 
+const canBeMeasured = ({ leftOut, frameState }: LightRow): boolean => !leftOut && frameState !== 'unusable';
+
 /** Whether the newest run of a light has ended with fewer darks than there are now, though it was to use them. */
 export function isOutdated(light: LightRow, darkCount: number): boolean {
-  return !light.leftOut && ended(light) && (light.settings?.useDarks ?? true) && (light.darkCount ?? 0) < darkCount;
+  const usesDarks = light.settings?.useDarks ?? true;
+  return canBeMeasured(light) && ended(light) && usesDarks && (light.darkCount ?? 0) < darkCount;
+}
+
+/**
+ * Whether a light has no run that was one of a light: it has none at all, or the frame had become something else when
+ * its run began.
+ */
+export function wantsFirstRun(light: LightRow): boolean {
+  return canBeMeasured(light) && (light.state === null || light.reason === 'bad-case');
 }
 
 /**
  * The lights that want a run: those without one, those whose newest run used fewer darks than there are now, and those
- * whose settings are to change. Lights that are left out or under way are not among them.
+ * whose settings are to change. Lights that are left out, cannot be read or are under way are not among them.
  */
 export function lightsToMeasure(
   lights: readonly LightRow[],
@@ -30,7 +41,7 @@ export function lightsToMeasure(
     const settings = { ...before, ...change };
     const keys = Object.keys(settings) as (keyof MeasurementSettings)[];
     const changes = ended(light) && keys.some((key) => settings[key] !== before[key]);
-    const wanted = !light.leftOut && (light.state === null || changes || isOutdated(light, darkCount));
+    const wanted = canBeMeasured(light) && (wantsFirstRun(light) || changes || isOutdated(light, darkCount));
     return wanted ? [{ captureFrameId: light.captureFrameId, frameId: light.frameId, settings }] : [];
   });
 }

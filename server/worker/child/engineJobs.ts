@@ -1,7 +1,7 @@
-import type { z } from 'zod';
+import { z } from 'zod';
 import type { frameHealthSchema } from '../../../shared/contracts/captures';
 import type { CameraRecord, MeasureCase } from '../../../shared/contracts/measureCase';
-import type { MeasureResult, RadialProfile } from '../../../shared/contracts/measureResult';
+import { measureResultSchema, radialProfileSchema, type RadialProfile } from '../../../shared/contracts/measureResult';
 
 export interface InspectAnswer {
   format: string;
@@ -13,11 +13,16 @@ export interface InspectAnswer {
   thumbnail: { widthPx: number; heightPx: number };
 }
 
-export interface MeasureAnswer {
-  result: MeasureResult;
-  radialProfile: RadialProfile | null;
-  misfit: { widthPx: number; heightPx: number } | null;
-}
+const isEven = (profile: RadialProfile): boolean =>
+  Object.values(profile).every((array) => array.length === profile.radiusMm.length);
+
+/** What a child answers to `measure`; the worker lets nothing else into the database. */
+export const measureAnswerSchema = z.object({
+  result: measureResultSchema,
+  radialProfile: radialProfileSchema.refine(isEven, 'The arrays of a profile have one length.').nullable(),
+  misfit: z.object({ widthPx: z.number().int().positive(), heightPx: z.number().int().positive() }).nullable(),
+});
+export type MeasureAnswer = z.infer<typeof measureAnswerSchema>;
 
 /** The jobs that the engine's child processes do. */
 export type EngineJobs = {

@@ -1,9 +1,11 @@
+import { ZodError } from 'zod';
 import type { MeasurementState, ProgressEvent } from '../../../shared/contracts/measurements';
 import type { Stage } from '../../../shared/contracts/measureResult';
 import { inLaboratory, scoped } from '../../database/LaboratoryScope';
 import { publishProgress } from '../../features/events/publishProgress';
 import { endRun, failedOutput, type RunOutput } from '../../features/measurements/endRun';
 import { readRunInputs, type RunInputs } from '../../features/measurements/readRunInputs';
+import { measureAnswerSchema } from '../child/engineJobs';
 import { JobFailure, PoolClosed } from '../pool/jobFailure';
 import { fileOf } from './fileOf';
 import { holdLease } from './holdLease';
@@ -41,6 +43,7 @@ export async function runMeasurement(context: WorkContext, measurementId: string
 
 const GIVEN_UP = `Measuring this frame broke the worker ${MAX_ATTEMPTS} times. Take the frame again.`;
 const NOT_A_LIGHT = 'This frame is not a light any more, so there is nothing to measure on it.';
+const NO_ANSWER = 'The engine could not put what it found on this frame into numbers. Take the frame again.';
 
 /** One run in this worker's hands. */
 class Run {
@@ -68,11 +71,15 @@ class Run {
     try {
       const { answer, blobs } = await this.context.pool.run('measure', data, files, (stage) => this.reached(stage));
       const [bytes] = blobs;
-      const { result, radialProfile } = answer;
+      const { result, radialProfile } = measureAnswerSchema.parse(answer);
       const misfit = answer.misfit && bytes ? { ...answer.misfit, encoding: 'misfit8+gzip', bytes } : null;
       return { result, radialProfile, misfit };
     } catch (error) {
       if (error instanceof JobFailure) return this.failed(error.reason, error.message);
+      if (error instanceof ZodError) {
+        this.context.log.error({ err: error, measurementId: this.id }, 'the engine gave an answer that is none');
+        return this.failed('unsupported', NO_ANSWER);
+      }
       throw error;
     }
   }

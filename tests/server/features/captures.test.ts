@@ -299,6 +299,43 @@ test('a frame changes from dark to light and gets its run then; left out, it has
   expect((await change({})).body).toMatchObject({ kind: 'flat' });
 });
 
+test('a light that was a dark when its run began gets another run when it is a light again', async () => {
+  const light = await upload(await picture()).expect(201);
+  const params = { captureId, captureFrameId: light.body.id };
+  const id = light.body.measurement.id as string;
+  const change = (body: object) => call(app, endpoints.updatePlace, { token, params, body }).expect(200);
+  await change({ kind: 'dark' });
+  const message = 'stands in for the words of the worker';
+  const result = { id, status: 'failed', reason: 'bad-case', message } as const;
+  const ended = { state: 'failed', reason: 'bad-case', message, result, finishedAt: new Date() } as const;
+  expect(await laboratory().update(MeasurementEntity, { id }, ended)).toBe(1);
+  expect((await change({ kind: 'light' })).body.measurement).toMatchObject({ state: 'waiting' });
+  expect(await laboratory().find(MeasurementEntity, { where: { captureId } })).toHaveLength(2);
+  await change({ kind: 'light' });
+  expect(await laboratory().find(MeasurementEntity, { where: { captureId } })).toHaveLength(2);
+});
+
+test('runs that waited for a dark are queued when it is left out before it was looked at', async () => {
+  const light = await upload(await picture()).expect(201);
+  const run = light.body.measurement.id as string;
+  const dark = await upload(await picture(), 'dark').expect(201);
+  const before = (await jobs('run-measurement')).filter((id) => id === run);
+  const params = { captureId, captureFrameId: dark.body.id };
+  await call(app, endpoints.updatePlace, { token, params, body: { leftOut: true } }).expect(200);
+  const after = (await jobs('run-measurement')).filter((id) => id === run);
+  expect(after).toHaveLength(before.length + 1);
+});
+
+test('a light that cannot be read is not asked for when darks come later', async () => {
+  const light = await upload(await picture()).expect(201);
+  await endRun(light.body, 200);
+  await laboratory().update(FrameEntity, { id: light.body.frameId }, { state: 'unusable', problem: 'cut off' });
+  await upload(await picture(), 'dark').expect(201);
+  expect((await detail()).outdatedCount).toBe(0);
+  const again = { token, params: { captureId }, body: { useDarks: false } };
+  expect((await call(app, endpoints.measureCapture, again).expect(201)).body.queued).toBe(0);
+});
+
 test('measuring again takes the lights whose run used fewer darks than there are, and others when settings change', async () => {
   const measure = async (body: object = {}): Promise<number> =>
     (await call(app, endpoints.measureCapture, { token, params: { captureId }, body }).expect(201)).body.queued;

@@ -177,6 +177,26 @@ test('counts and newest results follow the newest run of each frame that is not 
   ]);
 });
 
+test('a later frame that is refused does not hide the size of an aperture; one under way shows', async () => {
+  const lot = await addLot(app, token, { number: 'L-1', clientId }, ['P1']);
+  const apertureId = lot.apertures[0]?.id as string;
+  const read = async () => {
+    const { body } = await call(app, endpoints.lot, { token, params: { lotId: lot.id } }).expect(200);
+    return { newest: body.apertures[0].newest, refusedCount: body.refusedCount };
+  };
+  await (
+    await addLight(apertureId)
+  )('measured', 201);
+  await (
+    await addLight(apertureId)
+  )('refused');
+  expect(await read()).toMatchObject({ newest: { state: 'measured', sizeUm: 201 }, refusedCount: 0 });
+  await (
+    await addLight(apertureId)
+  )('waiting');
+  expect(await read()).toMatchObject({ newest: { state: 'waiting' } });
+});
+
 test('a client sees its own lots and how far they are, and no result, note or refusal', async () => {
   const otherClient = await addClient(app, token, 'Other');
   const own = await addLot(app, token, { number: 'L-1', clientId, note: 'handle with care' }, ['P1', 'P2']);
