@@ -11,7 +11,7 @@ import { ViewSwitch } from '@/components/ui/ViewSwitch';
 import { useBenchLight } from '@/hooks/theme/ThemeProvider';
 import { maskedCount } from '@/shared/optics/framePlane';
 import { DeskRingTable } from './DeskRingTable';
-import { frameNote, viewsFor } from './frameWords';
+import { frameName, frameNote, viewsFor } from './frameWords';
 import { LayersList } from './LayersList';
 import { LevelsControl } from './LevelsControl';
 import { LinePlates } from './LinePlates';
@@ -41,7 +41,7 @@ export function ViewerDesk({ props, state }: { props: ViewerProps; state: Viewer
   const [pointer] = useState(createPointerStore);
   const maskedPixels = useMemo(() => (misfit ? maskedCount(misfit) : null), [misfit]);
   const sheet = useRef<SheetHandle>(null);
-  const title = `${capture.apertureSerial}, frame ${position.number}`;
+  const title = `${capture.apertureSerial}, ${frameName(frame, position).toLowerCase()}`;
   // What is still being read keeps its place from the start.
   const coming = measured === null && props.noRings === null;
   const views = viewsFor(false, misfit !== null || coming);
@@ -158,7 +158,7 @@ export function ViewerDesk({ props, state }: { props: ViewerProps; state: Viewer
                   onHover={onHover}
                   onPlace={setPlace}
                   rowsBetween={rowsBetween}
-                  label={`Frame ${position.number} of ${capture.apertureSerial}.`}
+                  label={`${frameName(frame, position)} of ${capture.apertureSerial}.`}
                 />
                 {plane ? null : (
                   <View style={{ position: 'absolute', left: 0, top: 0, width: layout.frame.width, padding: 24 }}>

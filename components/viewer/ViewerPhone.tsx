@@ -9,7 +9,7 @@ import { useLook } from '@/components/ui/useLook';
 import { ViewSwitch } from '@/components/ui/ViewSwitch';
 import { maskedCount } from '@/shared/optics/framePlane';
 import { formatNumber } from '@/shared/units/format';
-import { frameSubtitle, viewsFor } from './frameWords';
+import { frameName, frameSubtitle, viewsFor } from './frameWords';
 import { LayersList } from './LayersList';
 import { LevelsControl } from './LevelsControl';
 import { LinePlates } from './LinePlates';
@@ -85,7 +85,7 @@ export function ViewerPhone({ props, state }: { props: ViewerProps; state: Viewe
             onSegment={state.setSegment}
             chosenOrder={state.chosenOrder}
             onChooseRing={state.setChosenOrder}
-            label={`Frame ${position.number} of ${capture.apertureSerial}.`}
+            label={`${frameName(frame, position)} of ${capture.apertureSerial}.`}
           />
         ) : null}
         {plane ? null : (

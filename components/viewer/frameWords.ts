@@ -4,10 +4,15 @@ import type { SheetView } from './SheetScene';
 
 const kindWords = { light: 'Frame', dark: 'Dark', flat: 'Flat' } as const;
 
+/** “Frame 5”, “Dark 2”. */
+export function frameName(frame: Pick<CaptureFrame, 'kind'>, position: { number: number }): string {
+  return `${kindWords[frame.kind]} ${position.number}`;
+}
+
 /** “Frame 5 of 8, 6.0 ms”. */
 export function frameSubtitle(frame: CaptureFrame, position: { number: number; count: number }): string {
   const exposure = frame.exposureMs === null ? '' : `, ${formatQuantity(frame.exposureMs, 'ms', { significant: 2 })}`;
-  return `${kindWords[frame.kind]} ${position.number} of ${position.count}${exposure}`;
+  return `${frameName(frame, position)} of ${position.count}${exposure}`;
 }
 
 /** “6.0 ms, peak 82 %, 5 darks taken off”. */

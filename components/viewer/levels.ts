@@ -31,11 +31,18 @@ export function countAt(table: Uint32Array, fraction: number): number {
 
 /** Part of the camera's range that the fitting levels span at least: a frame without light looks dark. */
 const LEAST_SPAN = 0.03;
+/** Most of the camera's range that is taken for light that is there everywhere. */
+const MOST_BACKGROUND = 0.03;
 
-/** From black to the brightest but one in ten thousand pixels; never narrower than 16 counts. */
+/**
+ * From the background (the darkest tenth of the pixels, black at least) to the brightest but one in ten thousand
+ * pixels; never narrower than 16 counts.
+ */
 export function fittingLevels(table: Uint32Array, blackCount: number, whiteCount: number): Levels {
-  const low = Math.round(Math.min(blackCount, whiteCount));
-  const least = low + Math.max(16, Math.round(LEAST_SPAN * (whiteCount - low)));
+  const black = Math.round(Math.min(blackCount, whiteCount));
+  const range = Math.max(0, whiteCount - black);
+  const low = Math.max(black, Math.min(countAt(table, 0.1), black + Math.round(MOST_BACKGROUND * range)));
+  const least = low + Math.max(16, Math.round(LEAST_SPAN * range));
   const high = Math.min(Math.max(countAt(table, 0.9999), least), Math.max(whiteCount, low + 16));
   return { low, high };
 }

@@ -4,6 +4,10 @@ const LONGEST_PX = 192;
 const MOST_RANGE = 1000;
 /** What the brightest tone stands for at least, as part of the camera's range: a dark looks dark. */
 const LEAST_PEAK = 0.03;
+/** Part of the small picture that is drawn black: what light there is everywhere does not hide the rings. */
+const BACKGROUND_PART = 0.05;
+/** Most of the camera's range that is taken for such background. */
+const MOST_BACKGROUND = 0.03;
 
 /** What a thumbnail's tone is fitted to, counts; peak and noise stand above and about black. */
 export interface ToneRange {
@@ -15,7 +19,7 @@ export interface ToneRange {
 
 /**
  * A small picture in logarithmic tone from the noise upward, so that the rings show beside the core: 0 at or below
- * black, 255 at the peak and above. Pixels are averaged, never skipped.
+ * the background, 255 at the peak and above. Pixels are averaged, never skipped.
  * @param plane counts, row-major
  */
 export function thumbnailTone(
@@ -39,12 +43,15 @@ export function thumbnailTone(
       numbers[row + column[x]]++;
     }
   }
-  const bytes = new Uint8Array(width * height);
-  const peak = Math.max(1e-9, peakCounts, LEAST_PEAK * (whiteCount - blackCount));
+  const levels = sums.map((sum, i) => sum / numbers[i] - blackCount);
+  const range = whiteCount - blackCount;
+  const background = levels.toSorted()[Math.floor(BACKGROUND_PART * levels.length)];
+  const low = Math.max(0, Math.min(background, MOST_BACKGROUND * range));
+  const peak = Math.max(1e-9, peakCounts - low, LEAST_PEAK * range);
   const knee = Math.min(MOST_RANGE, peak / Math.max(1, noiseCounts));
-  for (let i = 0; i < bytes.length; i++) {
-    const level = Math.max(0, Math.min(1, (sums[i] / numbers[i] - blackCount) / peak));
-    bytes[i] = Math.round((255 * Math.log1p(knee * level)) / Math.log1p(knee));
-  }
+  const bytes = Uint8Array.from(levels, (level) => {
+    const part = Math.max(0, Math.min(1, (level - low) / peak));
+    return Math.round((255 * Math.log1p(knee * part)) / Math.log1p(knee));
+  });
   return { widthPx: width, heightPx: height, bytes };
 }

@@ -25,9 +25,14 @@ test('the table counts each count, up to the last of 16 bits', () => {
   expect(countAt(table, 1)).toBe(65535);
 });
 
-test('fitting levels run from black to the brightest but one in ten thousand', () => {
+test('fitting levels run from the darkest tenth to the brightest but one in ten thousand', () => {
   const counts = Array.from({ length: 20_000 }, (_, i) => (i === 0 ? 4000 : 64 + (i % 300)));
-  expect(fittingLevels(countTable(planeOf(counts)), 64, 4095)).toEqual({ low: 64, high: 363 });
+  expect(fittingLevels(countTable(planeOf(counts)), 64, 4095)).toEqual({ low: 93, high: 363 });
+  expect(fittingLevels(countTable(planeOf(counts)), 110, 4095)).toEqual({ low: 110, high: 363 });
+});
+
+test('no more than three percent of the range is taken for background', () => {
+  expect(fittingLevels(countTable(planeOf([4095, 4095])), 64, 4095)).toEqual({ low: 64 + 121, high: 4095 });
 });
 
 test('a frame without light stays dark: its levels span three percent of the range, and 16 counts at least', () => {
