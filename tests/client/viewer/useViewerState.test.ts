@@ -37,7 +37,7 @@ test('a measured frame begins with its first dark ring, log tone and levels that
   const { result } = start({ frameId: 'a', plane: planeOf(64), measured, light: false });
   expect(result.current.chosenOrder).toBe(1);
   expect(result.current.tone).toBe('log');
-  expect(result.current.levels).toEqual({ low: 64, high: 1063 });
+  expect(result.current.levels).toEqual({ low: 163, high: 1063 });
   expect(result.current.negative).toBe(false);
   expect(result.current.segment).toMatchObject({ x0: 90, y0: 50 });
 });
@@ -53,7 +53,7 @@ test('levels, line and chosen ring belong to the frame; tone and layers stay', (
   expect(result.current.levels).toEqual({ low: 100, high: 500 });
   expect(result.current.chosenOrder).toBeNull();
   rerender({ frameId: 'b', plane: planeOf(80), measured, light: false });
-  expect(result.current.levels).toEqual({ low: 80, high: 1079 });
+  expect(result.current.levels).toEqual({ low: 179, high: 1079 });
   expect(result.current.chosenOrder).toBe(1);
   expect(result.current.tone).toBe('linear');
   expect(result.current.layers.measured).toBe(true);
