@@ -16,8 +16,6 @@ import { useLook } from '@/components/ui/useLook';
 import { useApertures } from '@/hooks/queries/apertures';
 import { useCaptures, useCreateCapture } from '@/hooks/queries/captures';
 import { useChosenBench } from '@/hooks/queries/chosenBench';
-import { useRole } from '@/hooks/session/SessionProvider';
-import { BENCH } from '@/shared/contracts/roles';
 
 /** Chooses bench and piece, then begins a capture; or goes on with one of the last. */
 export default function BeginCaptureScreen() {
@@ -30,7 +28,6 @@ export default function BeginCaptureScreen() {
   const apertures = useApertures(asked);
   const captures = useCaptures();
   const begin = useCreateCapture();
-  const canBegin = BENCH.includes(useRole());
   const chosenId = askedId ?? null;
   const chosen = apertures.data?.find((aperture) => aperture.id === chosenId);
 
@@ -45,7 +42,7 @@ export default function BeginCaptureScreen() {
     );
   };
   const reason = !bench ? 'Choose a bench.' : chosenId === null ? 'Choose a piece.' : undefined;
-  const button = canBegin ? (
+  const button = (
     <Button
       label={chosen ? `Take frames of ${chosen.serial}` : 'Take frames'}
       kind="primary"
@@ -56,7 +53,7 @@ export default function BeginCaptureScreen() {
       onPress={start}
       style={{ minHeight: 68 }}
     />
-  ) : undefined;
+  );
 
   const recent = (
     <Awaited result={captures} what="the last captures">
@@ -78,7 +75,7 @@ export default function BeginCaptureScreen() {
                   <Awaited result={benches} what="the benches">
                     {(list) => <BenchPicker benches={list} chosenId={bench?.id ?? null} onChoose={choose} />}
                   </Awaited>
-                  {canBegin ? <CaptureCautions laserClass={bench?.current.laser.laserClass} /> : null}
+                  <CaptureCautions laserClass={bench?.current.laser.laserClass} />
                 </>
               ),
             }
@@ -91,7 +88,7 @@ export default function BeginCaptureScreen() {
           <Awaited result={benches} what="the benches">
             {(list) => <BenchPicker benches={list} chosenId={bench?.id ?? null} onChoose={choose} />}
           </Awaited>
-          {canBegin ? <CaptureCautions laserClass={bench?.current.laser.laserClass} /> : null}
+          <CaptureCautions laserClass={bench?.current.laser.laserClass} />
         </>
       )}
       <View style={{ paddingHorizontal: desk ? 12 : space.l, paddingTop: 12, paddingBottom: 8, gap: space.s }}>

@@ -71,7 +71,7 @@ export default function CompareScreen() {
     <Button
       label={picking ? 'Show the comparison' : 'Choose sizes'}
       icon={picking ? 'compare' : 'plus'}
-      kind={chosenIds.length === 0 || picking ? 'primary' : 'plain'}
+      kind={picking ? 'primary' : 'plain'}
       trailing={null}
       fullBleed
       onPress={() => setPicking(!picking)}
@@ -79,26 +79,32 @@ export default function CompareScreen() {
     />
   );
   const worst = line.outliers[0];
-  const foot = desk ? undefined : (
-    <View style={{ flexDirection: 'row', gap: space.hair, paddingTop: space.hair }}>
-      {pick}
-      {worst && !picking ? (
-        <Button
-          label={`Look at ${worst.serial}`}
-          kind="primary"
-          fullBleed
-          href={`/measurements/${worst.measurementId}`}
-          style={{ flex: 1.3, minHeight: 68 }}
-        />
-      ) : null}
-    </View>
-  );
+  // While there is nothing to do here but choose, the places keep the foot.
+  const foot =
+    desk || (chosenIds.length === 0 && !picking) ? undefined : (
+      <View style={{ flexDirection: 'row', gap: space.hair, paddingTop: space.hair }}>
+        {pick}
+        {worst && !picking ? (
+          <Button
+            label={`Look at ${worst.serial}`}
+            kind="primary"
+            fullBleed
+            href={`/measurements/${worst.measurementId}`}
+            style={{ flex: 1.3, minHeight: 68 }}
+          />
+        ) : null}
+      </View>
+    );
   const facts = compared.length === 0 ? null : <Facts line={line} compared={compared} basis={shownBasis} />;
 
   return (
     <Screen
       title="Compare"
-      subtitle={compared.length === 0 ? undefined : `${compared.length} pieces, ${rings} ring radii`}
+      subtitle={
+        compared.length === 0
+          ? undefined
+          : `${compared.length} ${compared.length === 1 ? 'size' : 'sizes'}, ${rings} ring radii`
+      }
       wavelengthNm={first?.wavelengthNm ?? null}
       benchLabel={first?.benchName ?? null}
       foot={foot}
@@ -133,7 +139,14 @@ export default function CompareScreen() {
       {!desk && picking ? (
         picker
       ) : chosenIds.length === 0 ? (
-        <EmptyState sentence="Choose three sizes or more. Their ring radii are drawn against 1/size, and the straight line through them tests the bench." />
+        <EmptyState
+          sentence="Choose three sizes or more. Their ring radii are drawn against 1/size, and the straight line through them tests the bench."
+          action={
+            desk ? undefined : (
+              <Button label="Choose sizes" icon="plus" kind="primary" onPress={() => setPicking(true)} />
+            )
+          }
+        />
       ) : (
         <Awaited result={comparison} what="the rings">
           {() => (
@@ -225,7 +238,7 @@ function Drawing({ line, basis, varied, onBasis }: DrawingProps) {
           <Text variant="strong">No line yet</Text>
           <Text variant="small">
             {line.reason === 'too-few'
-              ? `${line.usedCount === 1 ? 'One piece is' : `${line.usedCount} pieces are`} too few: a line through two fits always. Choose three or more.`
+              ? `${line.usedCount === 1 ? 'One size is' : `${line.usedCount} sizes are`} too few: a line through two fits always. Choose three or more.`
               : `All have the same ${basis} size. ${varied || basis === 'measured' ? 'Choose pieces of other sizes.' : 'Choose pieces of other sizes, or take the measured size.'}`}
           </Text>
         </Plate>

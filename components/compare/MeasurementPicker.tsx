@@ -29,34 +29,31 @@ export function MeasurementPicker({ measurements, chosenIds, onChange, oddIds }:
             style={{
               backgroundColor: oddIds.includes(measurement.id) ? colours.lift : colours.plate,
               borderRadius: radius.plate,
-              minHeight: 52,
-              flexDirection: 'row',
-              alignItems: 'center',
-              paddingRight: desk ? 16 : space.l,
+              paddingHorizontal: desk ? 12 : space.l,
             }}
           >
             <CheckBox
-              bare
               checked={chosen}
               label={`${measurement.apertureSerial}, ${value} µm, ${measurement.frameName}`}
               onChange={(on) =>
                 onChange(on ? [...chosenIds, measurement.id] : chosenIds.filter((id) => id !== measurement.id))
               }
-            />
-            <View style={{ flex: 1, minWidth: 0 }}>
-              <Text variant="strong" lines={1}>
-                {measurement.apertureSerial}
+            >
+              <View style={{ flex: 1, minWidth: 0, paddingVertical: 6 }}>
+                <Text variant="strong" lines={1}>
+                  {measurement.apertureSerial}
+                </Text>
+                <Text variant="label" lines={1}>
+                  {measurement.frameName}
+                </Text>
+              </View>
+              <Text lines={1}>
+                <Text variant="medium" style={{ fontSize: 17, lineHeight: 22 }}>
+                  {value}
+                </Text>
+                <Text tone="ink2">{uncertainty === null ? '' : ` ± ${uncertainty}`}</Text>
               </Text>
-              <Text variant="label" lines={1}>
-                {measurement.frameName}
-              </Text>
-            </View>
-            <Text lines={1}>
-              <Text variant="medium" style={{ fontSize: 17, lineHeight: 22 }}>
-                {value}
-              </Text>
-              <Text tone="ink2">{uncertainty === null ? '' : ` ± ${uncertainty}`}</Text>
-            </Text>
+            </CheckBox>
           </View>
         );
       })}

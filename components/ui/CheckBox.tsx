@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { View } from 'react-native';
 import { Icon } from './Icon';
 import { Text } from './Text';
@@ -8,17 +9,17 @@ import { useLook } from './useLook';
 export interface CheckBoxProps {
   checked: boolean;
   onChange: (checked: boolean) => void;
-  /** Shown beside the box unless `bare`. */
+  /** Shown beside the box, unless `children` are. */
   label: string;
   hint?: string;
-  /** The box alone, in a row that carries the name already. */
-  bare?: boolean;
+  /** A whole row beside the box; all of it can be touched. */
+  children?: ReactNode;
   disabled?: boolean;
   testID?: string;
 }
 
 /** A square box; the tick says chosen, not the colour. */
-export function CheckBox({ checked, onChange, label, hint, bare, disabled, testID }: CheckBoxProps) {
+export function CheckBox({ checked, onChange, label, hint, children, disabled, testID }: CheckBoxProps) {
   const { colours, desk } = useLook();
   const side = desk ? 20 : 24;
   return (
@@ -34,7 +35,6 @@ export function CheckBox({ checked, onChange, label, hint, bare, disabled, testI
         minWidth: target.min,
         flexDirection: 'row',
         alignItems: 'center',
-        justifyContent: bare ? 'center' : 'flex-start',
         gap: space.m,
       }}
     >
@@ -52,7 +52,7 @@ export function CheckBox({ checked, onChange, label, hint, bare, disabled, testI
       >
         {checked ? <Icon name="tick" size={side - 6} strokeWidth={2.5} colour={colours.plate} /> : null}
       </View>
-      {bare ? null : (
+      {children ?? (
         <View style={{ flexShrink: 1 }}>
           <Text>{label}</Text>
           {hint ? (
