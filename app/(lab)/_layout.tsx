@@ -1,12 +1,11 @@
-import { Redirect, Slot, usePathname } from 'expo-router';
-import { ClosedPlace } from '@/components/ui/ClosedPlace';
+import { Redirect, Slot } from 'expo-router';
 import { LabShell } from '@/components/ui/LabShell';
 import { useOnline } from '@/hooks/api/useOnline';
 import { useProgressEvents } from '@/hooks/events/useProgressEvents';
 import { BenchChoiceProvider } from '@/hooks/queries/chosenBench';
 import { useSession, useSignedIn } from '@/hooks/session/SessionProvider';
 import { useAddress } from '@/hooks/session/useAddress';
-import { isOpenTo, usePlaces } from '@/hooks/session/usePlaces';
+import { usePlaces } from '@/hooks/session/usePlaces';
 import { STAFF } from '@/shared/contracts/roles';
 
 /** Everything behind the sign-in: who is not signed in is sent there and comes back to the same address. */
@@ -29,11 +28,10 @@ function SignedIn() {
   const { user, membership } = useSignedIn();
   const online = useOnline();
   const places = usePlaces();
-  const path = usePathname();
   return (
     <LabShell places={places} online={online} userName={user.name}>
       {STAFF.includes(membership.role) ? <ProgressEvents /> : null}
-      {isOpenTo(membership.role, path) ? <Slot /> : <ClosedPlace role={membership.role} />}
+      <Slot />
     </LabShell>
   );
 }

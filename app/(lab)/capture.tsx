@@ -16,9 +16,20 @@ import { useLook } from '@/components/ui/useLook';
 import { useApertures } from '@/hooks/queries/apertures';
 import { useCaptures, useCreateCapture } from '@/hooks/queries/captures';
 import { useChosenBench } from '@/hooks/queries/chosenBench';
+import { OpenTo } from '@/components/ui/OpenTo';
+import { useRole } from '@/hooks/session/SessionProvider';
+import { BENCH } from '@/shared/contracts/roles';
 
 /** Chooses bench and piece, then begins a capture; or goes on with one of the last. */
 export default function BeginCaptureScreen() {
+  return (
+    <OpenTo roles={BENCH} role={useRole()}>
+      <BeginCapture />
+    </OpenTo>
+  );
+}
+
+function BeginCapture() {
   const { aperture: askedId } = useLocalSearchParams<{ aperture?: string }>();
   const { desk } = useLook();
   const { warn } = useNotice();

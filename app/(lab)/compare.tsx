@@ -27,12 +27,23 @@ import { useComparison } from '@/hooks/queries/comparison';
 import { useMeasurements } from '@/hooks/queries/measurements';
 import type { Compared } from '@/shared/contracts/measurements';
 import { formatNumber } from '@/shared/units/format';
+import { OpenTo } from '@/components/ui/OpenTo';
+import { useRole } from '@/hooks/session/SessionProvider';
+import { STAFF } from '@/shared/contracts/roles';
 
 /** The most that one comparison takes, by the contract. */
 const MOST = 100;
 
 /** Measurements side by side: ring radius against 1/size, the straight line through it and what it says of the bench. */
 export default function CompareScreen() {
+  return (
+    <OpenTo roles={STAFF} role={useRole()}>
+      <Comparison />
+    </OpenTo>
+  );
+}
+
+function Comparison() {
   const { ids = '' } = useLocalSearchParams<{ ids?: string }>();
   const { desk } = useLook();
   const [picking, setPicking] = useState(false);

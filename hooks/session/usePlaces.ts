@@ -33,13 +33,6 @@ export function placeOfPath(path: string): string {
   return first;
 }
 
-/** Whether what stands at an address is open to a role; the server holds to the same roles. */
-export function isOpenTo(role: Role, path: string): boolean {
-  const first = path.split('/')[1] ?? '';
-  if (first === 'capture') return BENCH.includes(role);
-  return STAFF.includes(role) || !['captures', 'compare', 'bench', 'measurements'].includes(first);
-}
-
 /** Places of the person signed in, and where they are now. */
 export function usePlaces(): { rail: readonly PlaceOfApp[]; foot: readonly PlaceOfApp[]; current: string } {
   const role = useRole();

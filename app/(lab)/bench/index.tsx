@@ -10,9 +10,19 @@ import { useEquipment } from '@/hooks/queries/equipment';
 import { useRole } from '@/hooks/session/SessionProvider';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { Button } from '@/components/ui/Button';
+import { OpenTo } from '@/components/ui/OpenTo';
+import { STAFF } from '@/shared/contracts/roles';
 
 /** A phone shows the list; a desk shows the bench of this device beside it. */
 export default function BenchScreen() {
+  return (
+    <OpenTo roles={STAFF} role={useRole()}>
+      <Benches />
+    </OpenTo>
+  );
+}
+
+function Benches() {
   const { desk } = useLook();
   const equipment = useEquipment();
   const { bench, light } = useChosenBench();

@@ -1,8 +1,7 @@
 import { localAddress } from '@/hooks/session/useAddress';
-import { isOpenTo, placeOfPath, placesOf } from '@/hooks/session/usePlaces';
+import { placeOfPath, placesOf } from '@/hooks/session/usePlaces';
 import { urlOf } from '@/hooks/api/urlOf';
 import { lotEndpoints } from '@/shared/contracts/lots';
-import { roles } from '@/shared/contracts/roles';
 
 const keys = (role: Parameters<typeof placesOf>[0]) => placesOf(role).rail.map((place) => place.key);
 
@@ -27,14 +26,6 @@ test.each([
   ['/bench/lasers/new', 'bench'],
 ])('%s belongs to %s', (path, place) => {
   expect(placeOfPath(path)).toBe(place);
-});
-
-test('an address is open to those who may use what stands there', () => {
-  const open = (path: string) => roles.filter((role) => isOpenTo(role, path));
-  expect(open('/capture')).toEqual(['technician', 'manager']);
-  for (const path of ['/captures/1', '/measurements/1', '/compare', '/bench/new'])
-    expect(open(path)).toEqual(['technician', 'reviewer', 'manager']);
-  for (const path of ['/', '/lots/1', '/account', '/more', '/people', '/nowhere']) expect(open(path)).toEqual(roles);
 });
 
 test('after signing in one lands on an address of this application only', () => {

@@ -1,10 +1,19 @@
+import type { ReactNode } from 'react';
 import type { Role } from '@/shared/contracts/roles';
 import { Button } from './Button';
 import { EmptyState } from './EmptyState';
 import { Screen } from './Screen';
 
-/** Stands where a place would be that is not open to the role of the person signed in. */
-export function ClosedPlace({ role }: { role: Role }) {
+export interface OpenToProps {
+  roles: readonly Role[];
+  /** Role of the person signed in. */
+  role: Role;
+  children: ReactNode;
+}
+
+/** A screen for some roles; the others read whom it is for. The server holds to the same roles by itself. */
+export function OpenTo({ roles, role, children }: OpenToProps) {
+  if (roles.includes(role)) return children;
   const sentence =
     role === 'client'
       ? 'This page is for the people of the laboratory. What you have ordered stands under Lots.'
