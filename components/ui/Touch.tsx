@@ -32,6 +32,15 @@ function addressOf(href: Href): string {
   return typeof href === 'string' ? href : String(href.pathname);
 }
 
+/** Roles that the space bar acts on, though the platform acts for it on buttons only. */
+const SPACE_ROLES: readonly (Role | undefined)[] = ['checkbox', 'radio', 'switch', 'tab', 'option'];
+
+interface KeyPress {
+  key: string;
+  preventDefault(): void;
+  stopPropagation(): void;
+}
+
 /** What is touched: a button or a link, with focus, keys and names as the platform expects them. */
 export function Touch({
   children,
@@ -50,6 +59,12 @@ export function Touch({
   const web: Record<string, string | number | boolean | undefined> = {};
   if (current) web['aria-current'] = 'page';
   if (href !== undefined) web['href'] = addressOf(href);
+  const pressSpace = (event: KeyPress) => {
+    if (event.key !== ' ' || disabled) return;
+    event.preventDefault();
+    event.stopPropagation();
+    onPress?.();
+  };
   const press = (event: GestureResponderEvent) => {
     if (href !== undefined) {
       if (Platform.OS === 'web') {
@@ -75,6 +90,7 @@ export function Touch({
       disabled={disabled}
       onPress={press}
       {...webProps(web)}
+      {...(Platform.OS === 'web' && SPACE_ROLES.includes(role) ? { onKeyDownCapture: pressSpace } : {})}
       style={({ pressed }) => (typeof style === 'function' ? style({ pressed }) : style)}
     >
       {children}
