@@ -37,31 +37,30 @@ export function PiecePicker({ apertures, chosenId, onChoose, search }: PiecePick
   return (
     <View>
       <View role="radiogroup" aria-label="Piece" style={{ gap: space.hair }}>
-        {shown.map((aperture) => (
-          <Row
-            key={aperture.id}
-            dense={desk}
-            leading={<StageGlyph stage={aperture.newest?.state ?? 'waiting'} />}
-            title={aperture.serial}
-            aside={desk ? nominal(aperture) : undefined}
-            subtitle={desk ? undefined : `${nominal(aperture)}, lot ${aperture.lotNumber}`}
-            choice
-            selected={aperture.id === chosenId}
-            onPress={() => onChoose(aperture.id)}
-            label={`${aperture.serial}, ${nominal(aperture)}, lot ${aperture.lotNumber}`}
-            trailing={
-              <Text variant="small" tone="ink2" lines={1}>
-                {aperture.newest?.sizeUm
-                  ? desk
-                    ? formatMeasuredText(aperture.newest.sizeUm, aperture.newest.expandedUncertaintyUm, 'µm')
-                    : formatMeasured(aperture.newest.sizeUm, aperture.newest.expandedUncertaintyUm).value
-                  : desk
-                    ? `lot ${aperture.lotNumber}`
-                    : (aperture.newest?.state ?? '')}
-              </Text>
-            }
-          />
-        ))}
+        {shown.map((aperture) => {
+          const found = result(aperture, desk);
+          return (
+            <Row
+              key={aperture.id}
+              dense={desk}
+              leading={<StageGlyph stage={aperture.newest?.state ?? 'waiting'} />}
+              title={aperture.serial}
+              aside={desk ? nominal(aperture) : undefined}
+              subtitle={desk ? undefined : `${nominal(aperture)}, lot ${aperture.lotNumber}`}
+              choice
+              selected={aperture.id === chosenId}
+              onPress={() => onChoose(aperture.id)}
+              label={[aperture.serial, nominal(aperture), ...(desk ? [] : [`lot ${aperture.lotNumber}`]), found]
+                .filter(Boolean)
+                .join(', ')}
+              trailing={
+                <Text variant="small" tone="ink2" lines={1}>
+                  {found}
+                </Text>
+              }
+            />
+          );
+        })}
       </View>
       {apertures.length > MOST ? (
         <View style={{ padding: space.l }}>
@@ -72,4 +71,14 @@ export function PiecePicker({ apertures, chosenId, onChoose, search }: PiecePick
       ) : null}
     </View>
   );
+}
+
+/** The newest size, short on a phone; where there is none, the lot on a desk and what became of the frame on a phone. */
+function result({ newest, lotNumber }: Aperture, desk: boolean): string {
+  if (newest?.sizeUm != null) {
+    return desk
+      ? formatMeasuredText(newest.sizeUm, newest.expandedUncertaintyUm, 'µm')
+      : formatMeasured(newest.sizeUm, newest.expandedUncertaintyUm).value;
+  }
+  return desk ? `lot ${lotNumber}` : (newest?.state ?? '');
 }

@@ -67,7 +67,7 @@ export function Button({
       testID={testID}
       onPress={onPress}
       href={off ? undefined : href}
-      label={reason && off ? `${label}. ${reason}` : label}
+      label={reason && off ? undefined : label}
       disabled={off}
       style={({ pressed }) => [
         {

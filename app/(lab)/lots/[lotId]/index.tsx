@@ -43,19 +43,20 @@ export default function LotScreen() {
     );
   }
 
-  const actions = staff ? (
-    desk ? (
-      <View style={{ flexDirection: 'row', gap: 2 }}>
-        <IconButton icon="note" label="Change the lot" href={`/lots/${lotId}/edit`} />
-        <Button label="Add pieces" icon="plus" dense href={`/lots/${lotId}/add`} />
-      </View>
-    ) : (
-      <View style={{ flexDirection: 'row' }}>
-        <IconButton icon="note" label="Change the lot" href={`/lots/${lotId}/edit`} />
-        <IconButton icon="plus" label="Add pieces" href={`/lots/${lotId}/add`} />
-      </View>
-    )
-  ) : undefined;
+  const actions =
+    staff && data ? (
+      desk ? (
+        <View style={{ flexDirection: 'row', gap: 2 }}>
+          <IconButton icon="note" label="Change the lot" href={`/lots/${lotId}/edit`} />
+          <Button label="Add pieces" icon="plus" dense href={`/lots/${lotId}/add`} />
+        </View>
+      ) : (
+        <View style={{ flexDirection: 'row' }}>
+          <IconButton icon="note" label="Change the lot" href={`/lots/${lotId}/edit`} />
+          <IconButton icon="plus" label="Add pieces" href={`/lots/${lotId}/add`} />
+        </View>
+      )
+    ) : undefined;
   return (
     <Screen
       title={data ? `${data.number}, ${countOfKind(data.apertures.map((one) => one.kind))}` : 'Lot'}
