@@ -87,7 +87,7 @@ describe.each(viewportNames)('on a %s', (viewport) => {
     await signIn(client, 'client');
     await client.page.getByRole('link', { name: /^L-2607/ }).click();
     await client.page
-      .getByText(/OB-200-01/)
+      .getByText(/^[67] of 8 measured$/)
       .first()
       .waitFor();
     await client.screenshot('lot-client');

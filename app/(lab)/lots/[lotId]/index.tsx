@@ -4,6 +4,7 @@ import { AperturePanel } from '@/components/lots/AperturePanel';
 import { ApertureTable } from '@/components/lots/ApertureTable';
 import { countOfKind, dueWords } from '@/components/lots/apertureWords';
 import { LotSummary } from '@/components/lots/LotSummary';
+import { OrderedPieces } from '@/components/lots/OrderedPieces';
 import { Awaited } from '@/components/ui/Awaited';
 import { Button } from '@/components/ui/Button';
 import { EmptyState } from '@/components/ui/EmptyState';
@@ -26,7 +27,8 @@ export default function LotScreen() {
   const { light } = useChosenBench();
   const data = lot.data;
   const chosen = data?.apertures.find((one) => one.id === apertureId) ?? (desk ? data?.apertures[0] : undefined);
-  const panel = chosen ? <AperturePanel aperture={chosen} mayCapture={BENCH.includes(role)} mayEdit={staff} /> : null;
+  const panel =
+    chosen && staff ? <AperturePanel aperture={chosen} mayCapture={BENCH.includes(role)} mayEdit={staff} /> : null;
 
   if (!desk && apertureId !== undefined) {
     return (
@@ -69,7 +71,7 @@ export default function LotScreen() {
       }
       back="/lots"
       action={actions}
-      evidence={desk && chosen ? { title: chosen.serial, width: 400, content: panel } : undefined}
+      evidence={desk && chosen && panel ? { title: chosen.serial, width: 400, content: panel } : undefined}
       {...light}
     >
       <Awaited result={lot} what="the lot">
@@ -80,6 +82,8 @@ export default function LotScreen() {
                 sentence={staff ? 'No pieces yet. Add them one by one or by a serial pattern.' : 'No pieces yet.'}
                 action={staff ? <Button label="Add pieces" kind="primary" href={`/lots/${lotId}/add`} /> : undefined}
               />
+            ) : !staff ? (
+              <OrderedPieces lot={one} />
             ) : (
               <>
                 <LotSummary apertures={one.apertures} />
