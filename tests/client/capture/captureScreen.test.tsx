@@ -1,5 +1,5 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
-import { act, fireEvent, render, screen, waitFor } from '@testing-library/react-native';
+import { act, cleanup, fireEvent, render, screen, waitFor } from '@testing-library/react-native';
 import CaptureScreen from '@/app/(lab)/captures/[captureId]';
 import { ApiProblem } from '@/hooks/api/ApiProblem';
 import { call } from '@/hooks/api/call';
@@ -21,6 +21,13 @@ jest.mock('@/hooks/session/SessionProvider', () => ({ useRole: () => mockRole() 
 
 const answers = jest.mocked(call);
 
+let shown: QueryClient | undefined;
+// What is kept of the pictures has a time of its own, on which the process would wait.
+afterEach(() => {
+  cleanup();
+  shown?.clear();
+});
+
 function show(answer: CaptureDetail | ApiProblem): QueryClient {
   answers.mockReset();
   answers.mockImplementation(async (endpoint) => {
@@ -34,6 +41,7 @@ function show(answer: CaptureDetail | ApiProblem): QueryClient {
       mutations: { gcTime: Infinity },
     },
   });
+  shown = client;
   render(
     <QueryClientProvider client={client}>
       <CaptureScreen />
