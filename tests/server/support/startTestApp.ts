@@ -3,6 +3,7 @@ import type { DataSource } from 'typeorm';
 import { createApp, type App } from '../../../server/createApp';
 import { createDataSource } from '../../../server/database/createDataSource';
 import type { FakeInbox } from '../../../server/mail/startFakeInbox';
+import { startProgressHub } from '../../../server/features/events/startProgressHub';
 import type { DemoSignIn } from '../../../server/features/welcome/knownSignIns';
 import { createTestDatabase, type TestDatabase } from '../../support/testDatabase';
 
@@ -23,6 +24,8 @@ export interface TestAppChoice {
   demoSignIns?: readonly DemoSignIn[];
   inbox?: FakeInbox | null;
   webDir?: string | null;
+  /** Hands the progress of laboratories to the event streams, as in the real process. */
+  withProgress?: boolean;
 }
 
 /** The whole application on a database of its own, without a port; the clock can be moved. */
@@ -30,6 +33,8 @@ export async function startTestApp(choice: TestAppChoice = {}): Promise<TestApp>
   const testDatabase = await createTestDatabase();
   const database = await createDataSource(testDatabase.databaseUrl, 'ringwright-test').initialize();
   let aheadMs = 0;
+  const log = pino({ level: 'silent' });
+  const hub = choice.withProgress ? await startProgressHub({ databaseUrl: testDatabase.databaseUrl, log }) : null;
   const app = createApp({
     config: {
       publicUrl,
@@ -39,11 +44,11 @@ export async function startTestApp(choice: TestAppChoice = {}): Promise<TestApp>
       rateLimitFactor: choice.rateLimitFactor ?? 10_000,
     },
     database,
-    log: pino({ level: 'silent' }),
+    log,
     webDir: choice.webDir ?? null,
     inbox: choice.inbox ?? null,
     demoSignIns: choice.demoSignIns ?? [],
-    progress: { join: () => undefined },
+    progress: hub ?? { join: () => undefined },
     now: () => new Date(Date.now() + aheadMs),
   });
   return {
@@ -54,6 +59,8 @@ export async function startTestApp(choice: TestAppChoice = {}): Promise<TestApp>
       aheadMs += ms;
     },
     async stop() {
+      app.endStreams();
+      await hub?.stop();
       await app.background.idle();
       await database.destroy();
       await testDatabase.drop();
