@@ -4,6 +4,7 @@ const path = require('node:path');
 const { spawn } = require('node:child_process');
 const { checkout, typeScript, typeScriptEnvironment } = require('./checkout.js');
 const { checkNodeVersion } = require('./nodeVersion.js');
+const { packagesAreCurrent } = require('./npmPackages.js');
 const { sayProblem } = require('./say.js');
 const { PlainError } = require('./plainError.js');
 
@@ -29,12 +30,14 @@ function launch(file) {
   child.once('exit', (code, signal) => process.exit(code ?? (signal === 'SIGINT' ? 130 : 1)));
 }
 
-/** Says what to do in a clone whose packages are not installed. */
+/** Says what to do in a clone whose packages are not installed, or not those that its lock file names now. */
 function requirePackages() {
-  if (fs.existsSync(path.join(checkout, 'node_modules', 'tsx', 'package.json'))) return;
-  throw new PlainError(
-    `The npm packages are not installed. Run this once, then try again:\n  cd '${checkout}' && npm ci`,
-  );
+  if (packagesAreCurrent(checkout)) return;
+  const there = fs.existsSync(path.join(checkout, 'node_modules'));
+  const problem = there
+    ? 'The npm packages are not those of package-lock.json.'
+    : 'The npm packages are not installed.';
+  throw new PlainError(`${problem} Run this once, then try again:\n  cd '${checkout}' && npm ci`);
 }
 
 module.exports = { launch, requirePackages };
