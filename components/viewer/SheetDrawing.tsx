@@ -31,7 +31,7 @@ import { ringRows } from './ringRows';
 import type { SheetProps } from './Sheet';
 import type { SheetScene } from './SheetScene';
 import { useDisposable } from './useDisposable';
-import { useSheetKeys } from './useSheetKeys';
+import { sheetKeys } from './sheetKeys';
 import { useSheetPointers } from './useSheetPointers';
 
 const FINGER_PX = 24;
@@ -58,7 +58,6 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
   const surface = useRef<PictureSurfaceHandle>(null);
   const host = useRef<View>(null);
   const frameRegion = useRef<View>(null);
-  const chartRegion = useRef<View>(null);
   const place = useRef<Place | null>(null);
   const moved = useRef(false);
   const grip = useRef<Grip | null>(null);
@@ -203,7 +202,7 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
     movable,
     (at) => at.y < bottom(layout.frame) || (layout.plot !== null && at.y < layout.height),
   );
-  useSheetKeys(frameRegion, (key) => {
+  const frameKeys = sheetKeys((key) => {
     if (key === 'fit') fit();
     else if (key === 'in' || key === 'out') move((now) => zoomAbout(now, middle, key === 'in' ? 1.25 : 0.8, minScale));
     else
@@ -213,7 +212,7 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
         yPx: now.yPx + (key === 'up' ? 40 : key === 'down' ? -40 : 0),
       }));
   });
-  useSheetKeys(chartRegion, (key) => {
+  const chartKeys = sheetKeys((key) => {
     if (key === 'left' || key === 'down') props.onChooseRing?.(stepRing(dark, props.chosenOrder, -1));
     if (key === 'right' || key === 'up') props.onChooseRing?.(stepRing(dark, props.chosenOrder, 1));
   });
@@ -269,12 +268,11 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
         ref={frameRegion}
         role={movable ? 'group' : 'img'}
         aria-label={movable ? `${props.label} Plus and minus magnify, arrows move, 0 fits.` : props.label}
-        {...(movable ? webProps({ tabIndex: 0 }) : {})}
+        {...(movable ? { ...webProps({ tabIndex: 0 }), ...frameKeys } : {})}
         style={{ position: 'absolute', left: 0, top: 0, width: layout.frame.width, height: layout.frame.height }}
       />
       {layout.plot && dark.length > 0 && props.onChooseRing ? (
         <View
-          ref={chartRegion}
           role="slider"
           aria-label="Dark ring chosen on the profile"
           {...webProps({
@@ -284,6 +282,7 @@ export const SheetDrawing = memo(function SheetDrawing(props: SheetProps) {
             'aria-valuenow': chosen ? dark.indexOf(chosen) + 1 : 0,
             'aria-valuetext': choiceText,
           })}
+          {...chartKeys}
           style={{
             position: 'absolute',
             left: 0,

@@ -1,26 +1,15 @@
-import type { Browser } from 'playwright-core';
 import { accessibilityProblems } from '../support/e2e/accessibility';
 import { signIn } from '../support/e2e/signIn';
+import { useVisits } from '../support/e2e/useVisits';
 import { viewportNames } from '../support/e2e/viewports';
-import { launchBrowser, productUrls, visit, type Visit } from '../support/e2e/visit';
 
-let browser: Browser;
-let open: Visit | null = null;
-
-beforeAll(async () => {
-  browser = await launchBrowser();
-});
-afterEach(async () => {
-  await open?.close();
-  open = null;
-});
-afterAll(() => browser.close());
+const come = useVisits();
 
 /** Frames of the demo's lot on the first bench, of four sizes; of OB-300-01 the size differs from its nominal one. */
 const frames = ['OB-200-01-3', 'OB-250-01-1', 'OB-300-01-1', 'OB-400-01-1'];
 
 test.each(viewportNames)('on a %s a reviewer compares sizes and reads what they say of the bench', async (viewport) => {
-  open = await visit(browser, viewport, `${productUrls().url}/compare`);
+  const open = await come(viewport, '/compare');
   const { page, record } = open;
   await signIn(open, 'reviewer');
   await page.waitForURL('**/compare');

@@ -1,10 +1,11 @@
 import { readFileSync } from 'node:fs';
 import path from 'node:path';
-import type { Browser, Page } from 'playwright-core';
+import type { Page } from 'playwright-core';
 import { accessibilityProblems } from '../support/e2e/accessibility';
 import { signIn } from '../support/e2e/signIn';
+import { useVisits } from '../support/e2e/useVisits';
 import { viewportNames, type ViewportName } from '../support/e2e/viewports';
-import { launchBrowser, productUrls, visit, type Visit } from '../support/e2e/visit';
+import { productUrls } from '../support/e2e/visit';
 
 /** Frames with known truth, simulated by independent code: tests/reference/README.md. */
 const FRAMES = path.resolve(__dirname, '../reference/frames');
@@ -13,17 +14,7 @@ const darks = [1, 2, 3, 4, 5].map((n) => path.join(FRAMES, `pinhole-200um-dark-$
 const TRUE_SIZE_UM = 201.37;
 const size = /^201\.\d+$/;
 
-let browser: Browser;
-let open: Visit | null = null;
-
-beforeAll(async () => {
-  browser = await launchBrowser();
-});
-afterEach(async () => {
-  await open?.close();
-  open = null;
-});
-afterAll(() => browser.close());
+const come = useVisits();
 
 /** Begins a capture of the demo's piece that waits, on the bench that the reference frames were made for. */
 async function beginCapture(page: Page): Promise<void> {
@@ -53,7 +44,7 @@ async function savedLines(page: Page, button: RegExp): Promise<string[]> {
 
 describe.each(viewportNames)('from frames to a size on a %s', (viewport) => {
   test('a technician takes frames of a pinhole, gets its size, looks at the rings and takes the numbers away', async () => {
-    open = await visit(browser, viewport, productUrls().url);
+    const open = await come(viewport);
     const { page, record } = open;
     await signIn(open, 'technician');
     await beginCapture(page);
@@ -126,7 +117,7 @@ describe.each(viewportNames)('from frames to a size on a %s', (viewport) => {
   });
 
   test('a frame without a pattern is refused with the reason and what to do', async () => {
-    open = await visit(browser, viewport, productUrls().url);
+    const open = await come(viewport);
     const { page } = open;
     await signIn(open, 'technician');
     await beginCapture(page);
@@ -151,7 +142,7 @@ describe.each(viewportNames)('from frames to a size on a %s', (viewport) => {
 });
 
 test('files that are no frames are turned away in words, and the good one among them is measured', async () => {
-  open = await visit(browser, 'desk', productUrls().url);
+  const open = await come('desk');
   const { page } = open;
   await signIn(open, 'technician');
   await beginCapture(page);
@@ -182,7 +173,7 @@ test('files that are no frames are turned away in words, and the good one among 
 });
 
 test('without a network the frames wait, and go out by themselves when it is back', async () => {
-  open = await visit(browser, 'phone', productUrls().url);
+  const open = await come('phone');
   const { page } = open;
   await signIn(open, 'technician');
   await beginCapture(page);
@@ -202,7 +193,7 @@ test('without a network the frames wait, and go out by themselves when it is bac
 });
 
 test('what a batch has stored before the page was left is not sent again', async () => {
-  open = await visit(browser, 'desk', productUrls().url);
+  const open = await come('desk');
   const { page } = open;
   await signIn(open, 'technician');
   await beginCapture(page);

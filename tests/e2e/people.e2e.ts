@@ -1,28 +1,14 @@
-import type { Browser, Page } from 'playwright-core';
+import type { Page } from 'playwright-core';
 import { signIn } from '../support/e2e/signIn';
+import { useVisits } from '../support/e2e/useVisits';
 import { viewportNames } from '../support/e2e/viewports';
-import { launchBrowser, productUrls, visit, type Visit } from '../support/e2e/visit';
+import { productUrls } from '../support/e2e/visit';
 
-let browser: Browser;
-const visits: Visit[] = [];
-
-beforeAll(async () => {
-  browser = await launchBrowser();
-});
-afterEach(async () => {
-  for (const open of visits.splice(0)) await open.close();
-});
-afterAll(() => browser.close());
+const come = useVisits();
 
 let people = 0;
 /** A mail address that no other test uses. */
 const newEmail = (): string => `person-${Date.now()}-${(people += 1)}@osierbank.example`;
-
-async function come(viewport: (typeof viewportNames)[number], path = '/'): Promise<Visit> {
-  const open = await visit(browser, viewport, `${productUrls().url}${path}`);
-  visits.push(open);
-  return open;
-}
 
 /** Follows the link in the newest mail to a person, as it stands in the inbox of the demo. */
 async function followMail(page: Page, email: string, subject: RegExp): Promise<void> {

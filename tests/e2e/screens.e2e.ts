@@ -1,20 +1,11 @@
-import type { Browser, Page } from 'playwright-core';
+import type { Page } from 'playwright-core';
 import { accessibilityProblems } from '../support/e2e/accessibility';
 import { demoPerson, signIn } from '../support/e2e/signIn';
+import { useVisits } from '../support/e2e/useVisits';
 import { viewportNames } from '../support/e2e/viewports';
-import { launchBrowser, productUrls, visit, type Visit } from '../support/e2e/visit';
+import { productUrls } from '../support/e2e/visit';
 
-let browser: Browser;
-let open: Visit | null = null;
-
-beforeAll(async () => {
-  browser = await launchBrowser();
-});
-afterEach(async () => {
-  await open?.close();
-  open = null;
-});
-afterAll(() => browser.close());
+const come = useVisits();
 
 /** Main screens of a manager, each with words that stand there when its data have come. */
 const screens: [path: string, words: RegExp][] = [
@@ -35,7 +26,7 @@ const shown = (page: Page, words: RegExp) => page.getByText(words).filter({ visi
 
 describe.each(viewportNames)('on a %s', (viewport) => {
   test.each(['dark', 'light'] as const)('axe finds nothing wrong on the main screens, %s', async (theme) => {
-    open = await visit(browser, viewport, productUrls().url, { colorScheme: theme });
+    const open = await come(viewport, '/', { colorScheme: theme });
     const { page } = open;
     await signIn(open, 'manager');
     await page.goto(`${productUrls().url}/account`);
@@ -54,7 +45,7 @@ describe.each(viewportNames)('on a %s', (viewport) => {
   });
 
   test('a reload keeps the place, back returns, and an address that is none says so', async () => {
-    open = await visit(browser, viewport, `${productUrls().url}/lots`);
+    const open = await come(viewport, '/lots');
     const { page } = open;
     await signIn(open, 'technician');
     await page.waitForURL('**/lots');
@@ -78,7 +69,7 @@ describe.each(viewportNames)('on a %s', (viewport) => {
 });
 
 test('with the keyboard alone one signs in, goes to a size, to its rings, and saves the ring table', async () => {
-  open = await visit(browser, 'desk', productUrls().url);
+  const open = await come('desk');
   const { page } = open;
   const person = await demoPerson('reviewer');
   await page.getByRole('button', { name: 'Sign in', exact: true }).waitFor();

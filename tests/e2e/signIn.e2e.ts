@@ -1,24 +1,14 @@
-import type { Browser } from 'playwright-core';
 import { accessibilityProblems } from '../support/e2e/accessibility';
 import { signIn } from '../support/e2e/signIn';
+import { useVisits } from '../support/e2e/useVisits';
 import { viewportNames } from '../support/e2e/viewports';
-import { launchBrowser, productUrls, visit, type Visit } from '../support/e2e/visit';
+import { productUrls } from '../support/e2e/visit';
 
-let browser: Browser;
-let open: Visit | null = null;
-
-beforeAll(async () => {
-  browser = await launchBrowser();
-});
-afterEach(async () => {
-  await open?.close();
-  open = null;
-});
-afterAll(() => browser.close());
+const come = useVisits();
 
 describe.each(viewportNames)('sign-in on a %s', (viewport) => {
   test('the page loads without the drawing engine, without another host and without an error', async () => {
-    open = await visit(browser, viewport, productUrls().url);
+    const open = await come(viewport);
     await open.page.getByRole('button', { name: 'Sign in', exact: true }).waitFor();
     await open.page.waitForLoadState('load');
     await open.screenshot('sign-in');
@@ -28,13 +18,13 @@ describe.each(viewportNames)('sign-in on a %s', (viewport) => {
   });
 
   test.each(['dark', 'light'] as const)('axe finds nothing wrong in the %s theme', async (colorScheme) => {
-    open = await visit(browser, viewport, productUrls().url, { colorScheme });
+    const open = await come(viewport, '/', { colorScheme });
     await open.page.getByRole('button', { name: 'Sign in', exact: true }).waitFor();
     expect(await accessibilityProblems(open.page)).toEqual([]);
   });
 
   test('the demo technician signs in, stays signed in over a reload, and sees the lots', async () => {
-    open = await visit(browser, viewport, productUrls().url);
+    const open = await come(viewport);
     await signIn(open, 'technician');
     await open.page.reload();
     await open.page.getByRole('link', { name: 'Lots' }).first().click();
@@ -46,7 +36,7 @@ describe.each(viewportNames)('sign-in on a %s', (viewport) => {
   });
 
   test('a wrong password is refused in words, and the page stays', async () => {
-    open = await visit(browser, viewport, productUrls().url);
+    const open = await come(viewport);
     await open.page.getByLabel('Work e-mail').fill('nobody@nowhere.example');
     await open.page.getByLabel('Password', { exact: true }).fill('not the password');
     await open.page.getByRole('button', { name: 'Sign in', exact: true }).click();
@@ -56,7 +46,7 @@ describe.each(viewportNames)('sign-in on a %s', (viewport) => {
 });
 
 test('over the local network without TLS, where the page is no secure context, a person signs in too', async () => {
-  open = await visit(browser, 'phone', productUrls().networkUrl);
+  const open = await come('phone', productUrls().networkUrl);
   expect(await open.page.evaluate('window.isSecureContext')).toBe(false);
   await signIn(open, 'technician');
   await open.page.reload();

@@ -1,15 +1,15 @@
 import { readFileSync } from 'node:fs';
-import type { Browser, Page } from 'playwright-core';
+import type { Page } from 'playwright-core';
 import sharp from 'sharp';
 import { accountEndpoints } from '../../shared/contracts/accounts';
 import { measurementEndpoints } from '../../shared/contracts/measurements';
 import { accessibilityProblems } from '../support/e2e/accessibility';
 import { demoPerson, signIn } from '../support/e2e/signIn';
+import { useVisits } from '../support/e2e/useVisits';
 import { viewportNames, type ViewportName } from '../support/e2e/viewports';
-import { launchBrowser, productUrls, visit, type Visit } from '../support/e2e/visit';
+import { productUrls, type Visit } from '../support/e2e/visit';
 
-let browser: Browser;
-let open: Visit | null = null;
+const come = useVisits();
 let framePath = '';
 
 /** Path of the viewer on a measured frame of the demo. */
@@ -32,7 +32,7 @@ async function measuredFramePath(): Promise<string> {
 }
 
 async function openViewer(viewport: ViewportName, colorScheme: 'dark' | 'light' = 'dark'): Promise<Visit> {
-  const opened = await visit(browser, viewport, productUrls().url, { colorScheme });
+  const opened = await come(viewport, '/', { colorScheme });
   await signIn(opened, 'technician');
   if (colorScheme === 'light') await opened.page.evaluate("localStorage.setItem('ringwright.theme', 'light')");
   await opened.page.goto(`${productUrls().url}${framePath}`);
@@ -63,18 +63,12 @@ async function coloursOf(page: Page): Promise<number> {
 }
 
 beforeAll(async () => {
-  browser = await launchBrowser();
   framePath = await measuredFramePath();
 });
-afterEach(async () => {
-  await open?.close();
-  open = null;
-});
-afterAll(() => browser.close());
 
 describe.each(viewportNames)('the frame viewer on a %s', (viewport) => {
   test('draws the frame with the engine that this application itself sends', async () => {
-    open = await openViewer(viewport);
+    const open = await openViewer(viewport);
     expect(open.record.requests.some((path) => path.endsWith('/canvaskit.wasm'))).toBe(true);
     expect(open.record.foreignRequests).toEqual([]);
     expect(open.record.errors).toEqual([]);
@@ -83,7 +77,7 @@ describe.each(viewportNames)('the frame viewer on a %s', (viewport) => {
   });
 
   test('chooses the next ring by key, on the profile and in its numbers', async () => {
-    open = await openViewer(viewport);
+    const open = await openViewer(viewport);
     const { page } = open;
     await page.getByText('Dark ring 1, radius').waitFor();
     const rings = Number(await profile(page).getAttribute('aria-valuemax'));
@@ -94,7 +88,7 @@ describe.each(viewportNames)('the frame viewer on a %s', (viewport) => {
   });
 
   test('saves the profile along the line as CSV', async () => {
-    open = await openViewer(viewport);
+    const open = await openViewer(viewport);
     const { page } = open;
     if (viewport === 'phone') await page.getByRole('tab', { name: 'Line' }).click();
     else await page.getByRole('checkbox', { name: 'Line' }).click();
@@ -108,14 +102,14 @@ describe.each(viewportNames)('the frame viewer on a %s', (viewport) => {
   });
 
   test.each(['dark', 'light'] as const)('axe finds nothing wrong in the %s theme', async (colorScheme) => {
-    open = await openViewer(viewport, colorScheme);
+    const open = await openViewer(viewport, colorScheme);
     await open.screenshot(`viewer-${colorScheme}`);
     expect(await accessibilityProblems(open.page)).toEqual([]);
   });
 });
 
 test('a ring touched in the frame is chosen in the table and on the profile', async () => {
-  open = await openViewer('desk');
+  const open = await openViewer('desk');
   const { page } = open;
   await profile(page).press('ArrowRight');
   const frame = await page.getByRole('group', { name: /^Frame/ }).boundingBox();
@@ -131,7 +125,7 @@ test('a ring touched in the frame is chosen in the table and on the profile', as
 });
 
 test('the wheel magnifies about the pointer, 0 fits again', async () => {
-  open = await openViewer('desk');
+  const open = await openViewer('desk');
   const { page } = open;
   const frame = page.getByRole('group', { name: /^Frame/ });
   const box = await frame.boundingBox();
@@ -154,7 +148,7 @@ test('the wheel magnifies about the pointer, 0 fits again', async () => {
 });
 
 test('opened and left twenty times, the viewer leaves no canvas, no error and no memory behind', async () => {
-  open = await openViewer('desk');
+  const open = await openViewer('desk');
   const { page, record } = open;
   const heapBytes = () => page.evaluate<number>('CanvasKit.HEAPU8.length');
   const before = await heapBytes();
