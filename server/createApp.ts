@@ -36,6 +36,7 @@ import { todayRoutes } from './features/today/todayRoutes';
 import { createTodayService } from './features/today/todayService';
 import type { DemoSignIn } from './features/welcome/knownSignIns';
 import { welcomeRoutes } from './features/welcome/welcomeRoutes';
+import { accessStands } from './features/accounts/sessionRepository';
 import { createAccessTokens } from './http/accessTokens';
 import { Api } from './http/Api';
 import { Background } from './http/Background';
@@ -87,7 +88,7 @@ export function createApp(dependencies: AppDependencies): App {
   const limits = createRateLimits(config.rateLimitFactor);
   const background = new Background(log);
 
-  const api = new Api(tokens);
+  const api = new Api(tokens, (actor) => accessStands(database, actor));
   welcomeRoutes(api, { database, demo: config.demo, demoSignIns, inbox });
   accountRoutes(api, { accounts, sessions, cookie, limits, background });
   peopleRoutes(api, {

@@ -1,5 +1,5 @@
 import { router, useLocalSearchParams } from 'expo-router';
-import { useDeferredValue, useState } from 'react';
+import { useDeferredValue, useRef, useState } from 'react';
 import { View } from 'react-native';
 import { BenchPicker } from '@/components/capture/BenchPicker';
 import { CaptureCautions } from '@/components/capture/CaptureCautions';
@@ -39,16 +39,22 @@ function BeginCapture() {
   const apertures = useApertures(asked);
   const captures = useCaptures();
   const begin = useCreateCapture();
+  const beginning = useRef(false);
   const chosenId = askedId ?? null;
   const chosen = apertures.data?.find((aperture) => aperture.id === chosenId);
 
   const start = () => {
-    if (!bench || chosenId === null) return;
+    // A second press may come before the first one is drawn.
+    if (!bench || chosenId === null || beginning.current) return;
+    beginning.current = true;
     begin.mutate(
       { apertureId: chosenId, benchId: bench.id },
       {
         onSuccess: (capture) => router.push(`/captures/${capture.id}`),
         onError: (error) => warn(error.message),
+        onSettled: () => {
+          beginning.current = false;
+        },
       },
     );
   };

@@ -64,7 +64,10 @@ export default function SignInScreen() {
       </View>
       {problem ? (
         <View style={{ marginTop: 10 }}>
-          <ProblemPlate title="You are not signed in." problem={problem} />
+          <ProblemPlate
+            title="You are not signed in."
+            problem={problem.kind === 'not-signed-in' ? { message: problem.message } : problem}
+          />
         </View>
       ) : null}
       {welcome.data?.demo ? (

@@ -152,7 +152,7 @@ export function ThreeWays({ result }: { result: Measured }) {
       {ways.map((way) =>
         way.sizeUm === null ? (
           <Text key={way.name} variant="small" tone="ink2">
-            {`${way.name}: none, ${way.reason ?? 'not to be had from this frame'}.`}
+            {`${way.name}: none. ${way.reason ?? 'It is not to be had from this frame.'}`}
           </Text>
         ) : null,
       )}

@@ -28,9 +28,10 @@ export function useSubmit<V extends FieldValues, C, O extends FieldValues, R>(
       done(await send(values));
     } catch (error) {
       if (!(error instanceof ApiProblem)) throw error;
-      const known = Object.entries(error.fields).filter(([name]) => name in form.getValues() || name.includes('.'));
+      const fields = Object.entries(error.fields);
+      const known = fields.filter(([name]) => form.getValues(name as FieldPath<V>) !== undefined);
       for (const [name, message] of known) form.setError(name as FieldPath<V>, { type: 'server', message });
-      if (known.length === 0) setProblem(error);
+      if (known.length === 0 || known.length < fields.length) setProblem(error);
     } finally {
       setBusy(false);
     }

@@ -63,7 +63,11 @@ export class Api {
   private readonly names = new Set<string>();
   private readonly streams = new Set<EventStream>();
 
-  constructor(private readonly tokens: AccessTokens) {}
+  /** `standsStill` tells whether the access that a token was given for has been ended or changed since. */
+  constructor(
+    private readonly tokens: AccessTokens,
+    private readonly standsStill: (actor: Actor) => Promise<boolean>,
+  ) {}
 
   /** `METHOD /path` of every endpoint that has a handler. */
   get registered(): ReadonlySet<string> {
@@ -81,7 +85,7 @@ export class Api {
       endpoint,
       ['json', 'empty'],
       async (request, response) => {
-        const actor = this.authorize(request, allowed);
+        const actor = await this.authorize(request, allowed);
         const call = { actor, ...validCall(endpoint, request, response) };
         sendJson(endpoint, response, await handle(call));
       },
@@ -111,7 +115,7 @@ export class Api {
   registerFile<E extends Endpoint>(endpoint: E, handle: (call: ActorCall<E>) => Promise<FileAnswer>): void {
     const allowed = rolesOf(endpoint);
     this.add(endpoint, ['csv', 'bytes', 'png'], async (request, response) => {
-      const actor = this.authorize(request, allowed);
+      const actor = await this.authorize(request, allowed);
       const answer = await handle({ actor, ...validCall(endpoint, request, response) });
       await sendFile(request, response, answer, fileTypes[endpoint.kind] as string);
     });
@@ -126,7 +130,7 @@ export class Api {
     if (!endpoint.multipart) throw wrongUse(endpoint, 'takes no file');
     const allowed = rolesOf(endpoint);
     this.add(endpoint, ['json'], async (request, response) => {
-      const actor = this.authorize(request, allowed);
+      const actor = await this.authorize(request, allowed);
       const call = {
         actor,
         params: validParams(endpoint.params, request.params) as ParamsOf<E>,
@@ -147,7 +151,7 @@ export class Api {
   ): void {
     const allowed = rolesOf(endpoint);
     this.add(endpoint, ['events'], async (request, response) => {
-      const actor = this.authorize(request, allowed);
+      const actor = await this.authorize(request, allowed);
       const call = { actor, ...validCall(endpoint, request, response) };
       const events = new EventStream(response, actor.until);
       this.streams.add(events);
@@ -174,10 +178,11 @@ export class Api {
     this.router[endpoint.method](endpoint.path, ...before, (request, response) => serve(request, response));
   }
 
-  private authorize(request: Request, allowed: readonly Role[]): Actor {
+  private async authorize(request: Request, allowed: readonly Role[]): Promise<Actor> {
     const [scheme, token] = (request.headers.authorization ?? '').split(' ');
     const actor = scheme?.toLowerCase() === 'bearer' && token ? this.tokens.read(token) : null;
-    if (actor === null) throw new ProblemError('not-signed-in', 'Sign in to go on.');
+    if (actor === null || !(await this.standsStill(actor)))
+      throw new ProblemError('not-signed-in', 'Sign in to go on.');
     if (!allowed.includes(actor.role)) {
       throw new ProblemError('forbidden', `This is not open to the role ${actor.role}.`);
     }

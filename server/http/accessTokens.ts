@@ -3,7 +3,7 @@ import { z } from 'zod';
 import { roleSchema } from '../../shared/contracts/roles';
 import type { Actor } from './Actor';
 
-/** An access token ends by itself after this, s. A changed role or ended access takes effect no later. */
+/** An access token ends by itself after this, s; every call asks as well whether its access still stands. */
 export const ACCESS_TOKEN_SECONDS = 600;
 
 const issuer = 'ringwright';

@@ -27,6 +27,7 @@ import { useLook } from '@/components/ui/useLook';
 import { ViewSwitch } from '@/components/ui/ViewSwitch';
 import { FrameSheet } from '@/components/viewer/FrameSheet';
 import { saveFile } from '@/hooks/files/saveFile';
+import { csvFileName, type CsvPart } from '@/shared/units/csvFileName';
 import { useFrameEvidence } from '@/hooks/queries/frameEvidence';
 import { useLot } from '@/hooks/queries/lots';
 import { useMeasureAgain, useMeasurement, useMeasurementCsv } from '@/hooks/queries/measurements';
@@ -265,10 +266,10 @@ function FramePicture({ measurement }: { measurement: MeasurementDetail }) {
 function Exports({ measurement }: { measurement: MeasurementDetail }) {
   const { warn, say } = useNotice();
   const csv = useMeasurementCsv(measurement.id);
-  const save = (table: 'radialProfileCsv' | 'ringTableCsv', what: string) =>
+  const save = (table: 'radialProfileCsv' | 'ringTableCsv', what: CsvPart) =>
     csv.mutate(table, {
       onSuccess: (text) => {
-        const name = `${measurement.apertureSerial}-${what}.csv`;
+        const name = csvFileName(measurement, what);
         saveFile(name, text, 'text/csv')
           .then(() => say(`${name} is saved.`))
           .catch(() => warn(`${name} could not be saved on this device.`));

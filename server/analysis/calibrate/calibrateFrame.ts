@@ -100,7 +100,7 @@ export function calibrateFrame({ light, darks, flats, measureCase }: Calibration
   else flags.push('no-flat');
 
   if (clipped > 0) growMask(mask, widthPx, heightPx, MASK.clipped, CLIP_MARGIN_PX * step);
-  const estimate = () => noiseModel(counts, mask, widthPx, heightPx, step, srgb ? {} : camera);
+  const estimate = () => noiseModel(counts, mask, widthPx, heightPx, step, srgb ? {} : camera, darkVariance);
   const before = estimate();
   const marked = markFrameDefects(counts, mask, widthPx, heightPx, step, before.noise);
   let defectCount = 0;
@@ -113,8 +113,6 @@ export function calibrateFrame({ light, darks, flats, measureCase }: Calibration
   const { noise, notes } = marked > 0 ? estimate() : before;
   // Rounding to whole counts is never less than the variance of an even spread over one count.
   noise.floor = Math.max(noise.floor, 1 / 12);
-  // Noise of the master dark is part of the frame's own scatter; a gain from the record does not know it.
-  if (noise.source === 'record') noise.floor += darkVariance;
   assumed.push(...notes);
   return {
     widthPx,

@@ -38,6 +38,8 @@ const RECORD_TOLERANCE = 1.35;
  * @param counts above black, row-major
  * @param mask pixels that are not to be used are not 0
  * @param step distance between neighbours of one colour: 1, or 2 for a mosaic
+ * @param darkVariance variance of the master dark that was taken off, counts²: part of the frame's own scatter already,
+ *   but unknown to the camera's record
  */
 export function noiseModel(
   counts: Float32Array,
@@ -46,6 +48,7 @@ export function noiseModel(
   heightPx: number,
   step: number,
   camera: CameraRecord,
+  darkVariance = 0,
 ): { noise: NoiseModel; notes: string[] } {
   const { levels, variances, numbers } = levelVariances(counts, mask, widthPx, heightPx, step);
   const free = fitVariance(levels, variances, numbers, null);
@@ -57,7 +60,7 @@ export function noiseModel(
     return { noise: { ...free, source: 'frame' }, notes };
   }
   const read = camera.readNoiseElectrons;
-  const floor = read === undefined ? free.floor : Math.max(free.floor, (read / gain) ** 2 + 1 / 12);
+  const floor = read === undefined ? free.floor : Math.max(free.floor, (read / gain) ** 2 + 1 / 12 + darkVariance);
   const recorded = fitVariance(levels, variances, numbers, { floor, perCount: 1 / gain });
   let worst = 1;
   for (let k = 0; k < levels.length; k++) {

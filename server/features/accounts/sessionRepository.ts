@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { IsNull, LessThan, Not, type FindOptionsWhere } from 'typeorm';
-import type { Transaction } from '../../database/Database';
+import type { Database, Transaction } from '../../database/Database';
+import type { Actor } from '../../http/Actor';
 import { RefreshSessionEntity } from '../../entities/RefreshSessionEntity';
 
 export interface RefreshSession {
@@ -85,4 +86,15 @@ export const revokeOtherFamilies = (
 /** Drops tokens of a person that ended by themselves before the given time. */
 export async function forgetExpired(transaction: Transaction, userId: string, before: Date): Promise<void> {
   await transaction.delete(RefreshSessionEntity, { userId, expiresAt: LessThan(before) });
+}
+
+/** Whether a person still has the access that the token was given for: the membership, its role and the sign-in. */
+export async function accessStands(database: Database, actor: Actor): Promise<boolean> {
+  const rows: unknown[] = await database.query(
+    `select from membership m
+      where m.id = $1 and m.active and m.role = $2
+        and exists (select from refresh_session s where s.family_id = $3 and s.revoked_at is null)`,
+    [actor.membershipId, actor.role, actor.familyId],
+  );
+  return rows.length > 0;
 }

@@ -1,6 +1,6 @@
 import { endpoints } from '../../../shared/contracts/endpoints';
 import type { Api } from '../../http/Api';
-import { csvFileName } from '../../reports/csvFileName';
+import { csvFileName } from '../../../shared/units/csvFileName';
 import { radialProfileCsv } from '../../reports/radialProfileCsv';
 import { ringTableCsv } from '../../reports/ringTableCsv';
 import type { MeasurementService } from './measurementService';

@@ -117,10 +117,12 @@ describe('measurement screen', () => {
     expect(screen.queryByText('Again')).toBeNull();
   });
 
-  it('saves the ring table under the name of the piece', async () => {
+  it('saves the ring table under the name of lot, piece and run', async () => {
     jest.mocked(callText).mockResolvedValue('order,radius\n');
     show(sampleDetail({ result: sampleResult() }));
     fireEvent.press(await screen.findByText('Ring table, CSV'));
-    await waitFor(() => expect(saveFile).toHaveBeenCalledWith('PO-100-07-rings.csv', 'order,radius\n', 'text/csv'));
+    await waitFor(() =>
+      expect(saveFile).toHaveBeenCalledWith('L-0417-PO-100-07-rings-00000000.csv', 'order,radius\n', 'text/csv'),
+    );
   });
 });

@@ -116,7 +116,9 @@ test('ended access ends the sessions, and comes back when it is restored or by a
   const person = await join(app, manager, 'reviewer');
   const params = { membershipId: person.session.membership.id };
   const set = (body: { active: boolean }) => call(app, endpoints.updatePerson, { token: manager.token, params, body });
+  await call(app, endpoints.lots, { token: person.token }).expect(200);
   await set({ active: false }).expect(200);
+  await call(app, endpoints.lots, { token: person.token }).expect(401);
   await call(app, endpoints.refresh, { cookie: person.refreshToken }).expect(401);
   await call(app, endpoints.signIn, { body: { email: person.email, password } }).expect(403);
   await set({ active: true }).expect(200);

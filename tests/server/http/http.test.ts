@@ -42,7 +42,7 @@ const token = () =>
 function kernel(register: (api: Api) => void) {
   const lines: string[] = [];
   const log = pino({ level: 'info' }, { write: (line: string) => void lines.push(line) });
-  const api = new Api(tokens);
+  const api = new Api(tokens, () => Promise.resolve(true));
   register(api);
   const app = express();
   app.use(logRequests(log), express.json({ limit: 1000 }), api.router);
@@ -221,7 +221,7 @@ describe('an event stream', () => {
 });
 
 test('an endpoint is registered once, and in the way of its kind', () => {
-  const api = new Api(tokens);
+  const api = new Api(tokens, () => Promise.resolve(true));
   api.register(endpoints.lasers, async () => []);
   expect(() => api.register(endpoints.lasers, async () => [])).toThrow('GET /lasers is registered already');
   expect(() => api.registerOpen(endpoints.cameras, async () => [])).toThrow('is not open');

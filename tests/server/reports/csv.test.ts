@@ -1,5 +1,5 @@
 import type { MeasurementDetail } from '../../../shared/contracts/measurements';
-import { csvFileName } from '../../../server/reports/csvFileName';
+import { csvFileName } from '../../../shared/units/csvFileName';
 import { lineProfileCsv } from '../../../server/reports/lineProfileCsv';
 import { radialProfileCsv } from '../../../server/reports/radialProfileCsv';
 import { ringTableCsv } from '../../../server/reports/ringTableCsv';
