@@ -191,8 +191,10 @@ interface EvidenceProps {
 
 function Evidence({ measurement, measured, chosenOrder, onChooseRing }: EvidenceProps) {
   const [view, setView] = useState<'frame' | 'misfit'>('frame');
-  const evidence = useFrameEvidence(measurement.state === 'failed' ? null : measurement.frameId, measurement);
-  if (measurement.state === 'failed') {
+  // Frames that do not fit together can each be looked at all the same.
+  const unseen = measurement.state === 'failed' && measurement.reason !== 'bad-case';
+  const evidence = useFrameEvidence(unseen ? null : measurement.frameId, measurement);
+  if (unseen) {
     return (
       <Plate>
         <Text tone="ink2">There is no picture of this frame: it could not be read.</Text>

@@ -92,9 +92,12 @@ const words: Record<RefusalReason | FailureReason, RefusalWords> = {
     steps: ['Measure again.', 'If it is stopped again, tell the manager and quote the number of the measurement.'],
   },
   'bad-case': {
-    name: 'Settings do not fit',
-    why: 'The settings of this measurement contradict each other.',
-    steps: ['Look at the bench revision and the camera.', 'Measure again with other settings.'],
+    name: 'Frames or settings do not fit',
+    why: 'The frames and settings of this measurement do not fit together.',
+    steps: [
+      'Take darks and flats with the camera set as for the light.',
+      'Look at the bench revision and the camera, then measure again.',
+    ],
   },
 };
 

@@ -24,7 +24,7 @@ export interface CalibrationInput {
 
 /**
  * Dark and flat correction, masks and noise model of one light frame.
- * @throws FrameProblem `unsupported` when a dark or flat has other dimensions than the light frame
+ * @throws FrameProblem `bad-case` when a dark or flat has other dimensions than the light frame
  */
 export function calibrateFrame({ light, darks, flats, measureCase }: CalibrationInput): CalibratedFrame {
   const { widthPx, heightPx } = light;
@@ -32,7 +32,7 @@ export function calibrateFrame({ light, darks, flats, measureCase }: Calibration
   for (const other of [...darks, ...flats]) {
     if (other.widthPx !== widthPx || other.heightPx !== heightPx) {
       throw new FrameProblem(
-        'unsupported',
+        'bad-case',
         `A dark or flat frame is ${other.widthPx} × ${other.heightPx} pixels, the light frame ${widthPx} × ${heightPx}. Give darks and flats of the same size and region.`,
       );
     }

@@ -278,7 +278,7 @@ describe('frames that cannot be measured', () => {
       darks: [graymap(new Uint16Array(32 * 32), 32, 32)],
       flats: [],
     });
-    expect(output.result).toMatchObject({ status: 'failed' });
+    expect(output.result).toMatchObject({ status: 'failed', reason: 'bad-case' });
     expect((output.result as { message: string }).message).toContain('32 × 32');
   });
 });
