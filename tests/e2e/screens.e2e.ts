@@ -99,7 +99,7 @@ test('with the keyboard alone one signs in, goes to a size, to its rings, and sa
   const download = page.waitForEvent('download');
   await tabTo(/^Ring table, CSV/);
   await page.keyboard.press('Enter');
-  expect((await download).suggestedFilename()).toMatch(/rings\.csv$/);
+  expect((await download).suggestedFilename()).toMatch(/-rings-[0-9a-f]{8}\.csv$/);
   await page.reload();
   await page.getByRole('link', { name: 'Look at the frame' }).first().waitFor();
   await tabTo(/^Look at the frame/);
