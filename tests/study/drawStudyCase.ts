@@ -60,7 +60,8 @@ export function drawStudyCase(random: RandomSource): StudyCase {
       readNoiseElectrons: random.betweenLog(2, 20),
       blackCount: Math.round(random.between(0.01, 0.04) * 2 ** bitDepth),
       exposure: random.chance(0.15) ? random.between(1.1, 3) : random.between(0.4, 0.9),
-      background: random.between(0, 0.02),
+      // Never below zero at a corner, so that it is a plane.
+      background: random.between(0.003, 0.02),
       slopeX: random.between(-0.003, 0.003),
       slopeY: random.between(-0.003, 0.003),
       onRecord: random.chance(0.5),

@@ -52,7 +52,7 @@ export function expectedFrame(study: StudyCase): ExpectedFrame {
   for (let i = 0; i < electrons.length; i++) {
     const across = (i % widthPx) / widthPx - 0.5;
     const down = Math.floor(i / widthPx) / heightPx - 0.5;
-    const level = Math.max(0, background + slopeX * across + slopeY * down);
+    const level = background + slopeX * across + slopeY * down;
     electrons[i] = electrons[i] * scale + level * exposure * fullElectrons;
   }
   return { electrons, table, peakElectrons: scale };
