@@ -18,6 +18,8 @@ export interface NoiseModel {
    * black and for each count of level.
    */
   rounding?: { blackCount: number; floor: number; perCount: number };
+  /** Variance at black before rounding, counts², where read noise and gain are on record and the frame agrees. */
+  recordedFloor?: number;
 }
 
 export function varianceAt(noise: NoiseModel, level: number): number {
@@ -29,6 +31,11 @@ export function varianceAt(noise: NoiseModel, level: number): number {
 const FOURTH_NORM = 70;
 const LEVELS = 40;
 const MOST_SAMPLES = 150_000;
+/**
+ * Recorded variance with rounding, counts², below which the frame cannot contradict the record: differences of whole
+ * counts then show the steps of rounding and not the noise.
+ */
+const LEAST_JUDGED = 0.4;
 /** How far the frame's own noise may lie from the camera record's before the record is set aside. */
 const RECORD_TOLERANCE = 1.35;
 
@@ -60,11 +67,20 @@ export function noiseModel(
     return { noise: { ...free, source: 'frame' }, notes };
   }
   const read = camera.readNoiseElectrons;
-  const floor = read === undefined ? free.floor : Math.max(free.floor, (read / gain) ** 2 + 1 / 12 + darkVariance);
-  const recorded = fitVariance(levels, variances, numbers, { floor, perCount: 1 / gain });
+  const readVariance = read === undefined ? undefined : (read / gain) ** 2 + darkVariance;
+  const told = (readVariance ?? free.floor) + 1 / 12;
+  const judged = levels.map((level) => told + Math.max(0, level) / gain > LEAST_JUDGED);
+  const keep = (values: number[]) => values.filter((_, k) => judged[k]);
+  const floor =
+    readVariance === undefined
+      ? free.floor
+      : judged[0]
+        ? Math.max(free.floor, readVariance + 1 / 12)
+        : readVariance + 1 / 12;
+  const recorded = fitVariance(keep(levels), keep(variances), keep(numbers), { floor, perCount: 1 / gain });
   let worst = 1;
   for (let k = 0; k < levels.length; k++) {
-    if (numbers[k] < 500) continue;
+    if (numbers[k] < 500 || !judged[k]) continue;
     const ratio = varianceAt({ ...recorded, source: 'record' }, levels[k]) / variances[k];
     worst = Math.max(worst, ratio, 1 / ratio);
   }
@@ -74,7 +90,7 @@ export function noiseModel(
     );
     return { noise: { ...free, source: 'frame' }, notes };
   }
-  return { noise: { ...recorded, source: 'record' }, notes };
+  return { noise: { ...recorded, source: 'record', recordedFloor: readVariance }, notes };
 }
 
 function levelVariances(counts: Float32Array, mask: Uint8Array, widthPx: number, heightPx: number, step: number) {

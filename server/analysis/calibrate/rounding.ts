@@ -47,8 +47,7 @@ export function roundedAt(level: number, variance: number, into: Rounded): Round
   // Written out, because functions made anew for every cell cost more than the arithmetic.
   const at = (low * (PLACES + 1) + left) * 2;
   const next = at + (PLACES + 1) * 2;
-  into.offset =
-    (1 - t) * ((1 - u) * table[at] + u * table[at + 2]) + t * ((1 - u) * table[next] + u * table[next + 2]);
+  into.offset = (1 - t) * ((1 - u) * table[at] + u * table[at + 2]) + t * ((1 - u) * table[next] + u * table[next + 2]);
   into.slope = Math.max(0, 1 + PLACES * ((1 - t) * (table[at + 2] - table[at]) + t * (table[next + 2] - table[next])));
   into.variance =
     (1 - t) * ((1 - u) * table[at + 1] + u * table[at + 3]) +

@@ -32,8 +32,8 @@ const LEAST_OVAL = 0.0015;
 const LEAST_KEYSTONE = 3e-4;
 /** Share of the misfit beyond noise that a shape must explain; else something else is wrong with the frame. */
 const LEAST_SHARE = 0.5;
-/** Fall of chi-square by which a shape other than round must pay. */
-const LEAST_GAIN = 16;
+/** Fall of chi-square by which a shape other than round must pay: by chance in four of a million round frames. */
+const LEAST_GAIN = 25;
 /** Variance at black, counts², from which on rounding is plain added noise. */
 const LEAST_SMOOTH = 0.4;
 /** Bins to the length λz/D where rings are narrow; never wider than a pixel. */

@@ -13,7 +13,7 @@ const FINER = [1.09, 1.04, 1.02];
 
 /**
  * The noise before rounding that explains best how the counts of each cell scatter about the model: maximum likelihood
- * over the cells' means and mean squares, on a grid.
+ * over the cells' means and mean squares, on a grid. Where read noise and gain are on record, these are taken.
  */
 export function roundingNoise(
   cells: Cells,
@@ -21,6 +21,7 @@ export function roundingNoise(
   noise: NoiseModel,
   blackCount: number,
 ): NonNullable<NoiseModel['rounding']> {
+  if (noise.recordedFloor !== undefined) return { blackCount, floor: noise.recordedFloor, perCount: noise.perCount };
   const expected: Rounded = { offset: 0, slope: 1, variance: 1 };
   const costOf = (floor: number, perCount: number): number => {
     let cost = 0;
