@@ -31,6 +31,12 @@ const DISAGREEMENT = 3.5;
 /** Share of the rings' power left unexplained that is worth a warning. */
 const POOR_FIT = 0.01;
 const FIRST_DARK = 3.83;
+/**
+ * Fresnel number from which on the transform gives no second opinion: the transform of a near-field pattern changes sign
+ * with frequency, and its modulus, all that is left without a centre, no longer follows one size alone. Found on
+ * simulated frames: up to here the opinion's errors are as it states them, beyond they are up to ten times larger.
+ */
+const NO_OPINION_FRESNEL_NUMBER = 0.5;
 
 /** Measures a calibrated frame as a pinhole's pattern, or says why it cannot be. */
 export function measurePinhole(
@@ -80,7 +86,7 @@ export function measurePinhole(
     optics,
     values.illumination,
     sizeMm,
-    whyNoOpinion(frame, found, values.x, values.y, rendered),
+    whyNoOpinion(frame, found, { x: values.x, y: values.y, rendered, fresnelNumber }),
   );
   const ringSize = sizeOfDarkRings(rings);
   const own = Math.hypot(spread.fit, spread.response, spread.illumination) * sizeUm;
@@ -185,9 +191,7 @@ function isCropped(frame: CalibratedFrame, x: number, y: number, firstDarkPx: nu
 function whyNoOpinion(
   frame: CalibratedFrame,
   found: PinholeFit,
-  x: number,
-  y: number,
-  rendered: boolean,
+  { x, y, rendered, fresnelNumber }: { x: number; y: number; rendered: boolean; fresnelNumber: number },
 ): string | null {
   if (frame.clippedFraction > 0) return 'The core is clipped, and the transform needs all of the light.';
   if (isCropped(frame, x, y, (FIRST_DARK / Math.PI) * found.fringePx))
@@ -197,6 +201,8 @@ function whyNoOpinion(
   if (found.second !== null && found.second.explained > 0.5 && found.second.relative > 0.003) {
     return 'A second pattern lies in the frame, and the transform cannot tell the two apart.';
   }
+  if (fresnelNumber > NO_OPINION_FRESNEL_NUMBER)
+    return 'In the near field the transform no longer follows the size alone.';
   if (found.shape !== 'round') return 'The pattern is not round, and the transform was fitted for round holes only.';
   return null;
 }

@@ -16,6 +16,9 @@ export interface RadialTable {
   byTaper: Float64Array;
 }
 
+// Local names: looking up a global once a point costs more than the arithmetic in some surroundings.
+const { ceil, cos, exp, floor, min, PI, sin, sqrt } = Math;
+
 /** Points of a period of v that the tables hold: one every eighth of a radian. */
 const STEP_V = 0.125;
 const RADIAL_NODES = 48;
@@ -30,31 +33,31 @@ const BEFORE = 2;
  */
 export function tabulatePattern(hole: RoundHole, reachMm: number): RadialTable {
   const { radiusMm: a, distanceMm: z, taper } = hole;
-  const k = (2 * Math.PI) / hole.wavelengthMm;
+  const k = (2 * PI) / hole.wavelengthMm;
   const stepMm = (STEP_V * z) / (k * a);
-  const rows = Math.ceil(reachMm / stepMm) + 5;
+  const rows = ceil(reachMm / stepMm) + 5;
   const [nodes, weights] = gaussLegendre(RADIAL_NODES);
   const intensity = new Float64Array(rows + BEFORE);
   const bySize = new Float64Array(rows + BEFORE);
   const byTaper = new Float64Array(rows + BEFORE);
   for (let row = 0; row < rows; row++) {
     const r = row * stepMm;
-    const centre = Math.sqrt(z * z + r * r);
-    const turns = Math.ceil(0.5 * row * STEP_V + 12);
+    const centre = sqrt(z * z + r * r);
+    const turns = ceil(0.5 * row * STEP_V + 12);
     const sums = [0, 0, 0, 0, 0, 0];
     for (let n = 0; n < RADIAL_NODES; n++) {
       const rho = nodes[n];
       const s = a * rho;
-      const weight = (2 * weights[n] * rho * Math.exp(-taper * rho * rho)) / turns;
+      const weight = (2 * weights[n] * rho * exp(-taper * rho * rho)) / turns;
       for (let m = 0; m < turns; m++) {
-        const cosine = Math.cos((Math.PI * (m + 0.5)) / turns);
+        const cosine = cos((PI * (m + 0.5)) / turns);
         const beyond = s * s - 2 * r * s * cosine;
-        const far = Math.sqrt(centre * centre + beyond);
+        const far = sqrt(centre * centre + beyond);
         // The distance beyond that from the hole's middle, without loss of digits.
         const phase = (k * beyond) / (far + centre);
         const fall = (weight * z * z) / (far * far);
-        const real = fall * Math.cos(phase);
-        const imaginary = fall * Math.sin(phase);
+        const real = fall * cos(phase);
+        const imaginary = fall * sin(phase);
         const bySizePhase = (k * (s * s - r * s * cosine)) / far;
         sums[0] += real;
         sums[1] += imaginary;
@@ -78,7 +81,7 @@ export function tabulatePattern(hole: RoundHole, reachMm: number): RadialTable {
 
 /** Value of a table by the polynomial through its six nearest points (Lagrange). */
 export function lookUp(table: Float64Array, place: number): number {
-  const row = Math.min(Math.floor(place), table.length - BEFORE - 4);
+  const row = min(floor(place), table.length - BEFORE - 4);
   const t = place - row;
   const i = row + BEFORE;
   const [p, q, s, w] = [t + 1, t - 1, t - 2, t + 2];
@@ -98,7 +101,7 @@ function gaussLegendre(n: number): [Float64Array, Float64Array] {
   const nodes = new Float64Array(n);
   const weights = new Float64Array(n);
   for (let i = 0; i < n; i++) {
-    let x = Math.cos((Math.PI * (i + 0.75)) / (n + 0.5));
+    let x = cos((PI * (i + 0.75)) / (n + 0.5));
     let slope = 1;
     for (let round = 0; round < 8; round++) {
       let before = 1;

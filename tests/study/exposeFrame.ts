@@ -9,8 +9,10 @@ export interface ExpectedFrame {
   peakElectrons: number;
 }
 
+const { sqrt } = Math;
+
 /** Places and weights of three points across a pixel (Gauss–Legendre). */
-const ACROSS = [-Math.sqrt(0.15), 0, Math.sqrt(0.15)];
+const ACROSS = [-sqrt(0.15), 0, sqrt(0.15)];
 const SHARES = [5 / 18, 8 / 18, 5 / 18];
 /** Of the pixels' response, relative standard deviation from pixel to pixel and over the sensor. */
 export const WHITE_RESPONSE = 0.005;
@@ -40,7 +42,7 @@ export function expectedFrame(study: StudyCase): ExpectedFrame {
         const dy = y + ACROSS[j] - centre.y;
         for (let i = 0; i < 3; i++) {
           const dx = x + ACROSS[i] - centre.x;
-          sum += SHARES[i] * SHARES[j] * lookUp(table.intensity, Math.sqrt(dx * dx + dy * dy) * perStep);
+          sum += SHARES[i] * SHARES[j] * lookUp(table.intensity, sqrt(dx * dx + dy * dy) * perStep);
         }
       }
       electrons[y * widthPx + x] = sum;

@@ -20,6 +20,8 @@ export interface StudyOutcome {
   fit: number;
   expanded: number;
   flags: string[];
+  /** Of the second opinion, relative; null where there is none. */
+  opinion: { error: number; uncertainty: number } | null;
 }
 
 /** Frames whose size could not be known better than this are no test of the engine. */
@@ -81,8 +83,9 @@ export async function studyFrame(seed: number, kind: StudyKind, drawn: boolean):
   );
   if (result.status !== 'measured' || result.sizeUm === null) {
     const reason = result.status === 'measured' ? 'no-size' : result.reason;
-    return { seed, study, bound, refusal: reason, error: NaN, fit: NaN, expanded: NaN, flags: [] };
+    return { seed, study, bound, refusal: reason, error: NaN, fit: NaN, expanded: NaN, flags: [], opinion: null };
   }
+  const { sizeUm, standardUncertaintyUm } = result.secondOpinion ?? {};
   return {
     seed,
     study,
@@ -92,5 +95,9 @@ export async function studyFrame(seed: number, kind: StudyKind, drawn: boolean):
     fit: (result.fitUncertaintyUm ?? NaN) / study.sizeUm,
     expanded: (result.expandedUncertaintyUm ?? NaN) / study.sizeUm,
     flags: result.flags,
+    opinion:
+      sizeUm == null || standardUncertaintyUm == null
+        ? null
+        : { error: sizeUm / study.sizeUm - 1, uncertainty: standardUncertaintyUm / study.sizeUm },
   };
 }
