@@ -14,7 +14,7 @@ body{overflow:hidden;-webkit-font-smoothing:antialiased;font-family:${fontFamily
 *{scrollbar-width:thin;scrollbar-color:${colours.rule} transparent}
 :focus{outline:none}
 :focus-visible{outline:${stroke.focus}px solid ${colours.ink0} !important;outline-offset:${stroke.focusOffset}px;z-index:2}
-input:focus-visible,textarea:focus-visible,select:focus-visible{outline-offset:3px}
+input:focus-visible,textarea:focus-visible,select:focus-visible{outline-offset:0}
 input:-webkit-autofill,input:-webkit-autofill:focus{-webkit-text-fill-color:${colours.ink0};box-shadow:0 0 0 100px ${colours.well} inset;caret-color:${colours.ink0}}
 a{text-decoration:none;color:inherit}
 @media (prefers-reduced-motion:reduce){*{animation:none !important;transition:none !important}}

@@ -63,10 +63,10 @@ export class Api {
   private readonly names = new Set<string>();
   private readonly streams = new Set<EventStream>();
 
-  /** `standsStill` tells whether the access that a token was given for has been ended or changed since. */
+  /** `accessStands` tells whether the access that a token was given for has been ended or changed since. */
   constructor(
     private readonly tokens: AccessTokens,
-    private readonly standsStill: (actor: Actor) => Promise<boolean>,
+    private readonly accessStands: (actor: Actor) => Promise<boolean>,
   ) {}
 
   /** `METHOD /path` of every endpoint that has a handler. */
@@ -181,7 +181,7 @@ export class Api {
   private async authorize(request: Request, allowed: readonly Role[]): Promise<Actor> {
     const [scheme, token] = (request.headers.authorization ?? '').split(' ');
     const actor = scheme?.toLowerCase() === 'bearer' && token ? this.tokens.read(token) : null;
-    if (actor === null || !(await this.standsStill(actor)))
+    if (actor === null || !(await this.accessStands(actor)))
       throw new ProblemError('not-signed-in', 'Sign in to go on.');
     if (!allowed.includes(actor.role)) {
       throw new ProblemError('forbidden', `This is not open to the role ${actor.role}.`);

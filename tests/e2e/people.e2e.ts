@@ -152,9 +152,32 @@ describe.each(viewportNames)('on a %s', (viewport) => {
     await page.getByLabel('Distance, mm').fill('500');
     await page.getByLabel('Standard uncertainty (k = 1), mm').fill('0.25');
     await page.getByRole('button', { name: 'Add the bench' }).click();
-    await page.getByText('Bench by the window').first().waitFor();
+    await page.waitForURL((url) => !url.pathname.endsWith('/new'));
+    await page.getByText('Distance, aperture to sensor').filter({ visible: true }).first().waitFor();
     await open.screenshot('bench-first');
-    expect(open.record.foreignRequests).toEqual([]);
+
+    await page.goto(`${productUrls().url}/lots/new`);
+    await page.getByLabel('Lot number').fill('L-1');
+    await page.getByRole('button', { name: 'Add a client' }).click();
+    await page.getByLabel('Name of the client').fill('Lanternhill Instruments');
+    await page.getByRole('button', { name: 'Add this client' }).click();
+    await page.getByLabel('Name of the client').waitFor({ state: 'detached' });
+    await page.getByRole('button', { name: 'Add the lot' }).click();
+    await page.waitForURL('**/lots/*/add');
+    const addPiece = async () => {
+      await page.getByLabel('Serial', { exact: true }).fill('AW-1');
+      await page.getByLabel('Nominal size, µm').fill('200');
+      await page.getByRole('button', { name: 'Add the piece' }).click();
+    };
+    await addPiece();
+    await page.waitForURL((url) => !url.pathname.endsWith('/add'));
+    await page.getByText('AW-1').filter({ visible: true }).first().waitFor();
     expect(open.record.errors).toEqual([]);
+    await page.getByRole('link', { name: 'Add pieces' }).first().click();
+    await page.waitForURL('**/lots/*/add');
+    await addPiece();
+    await page.getByText('Nothing was added: one serial number is not new.').waitFor();
+    await open.screenshot('piece-twice');
+    expect(open.record.foreignRequests).toEqual([]);
   });
 });

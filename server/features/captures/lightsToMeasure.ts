@@ -19,8 +19,8 @@ export function isOutdated(light: LightRow, darkCount: number): boolean {
 }
 
 /**
- * Whether a light has no run that was one of a light: it has none at all, or the frame had become something else when
- * its run began.
+ * Whether a light has no run that says anything of it: it has none at all, or when its run began the frame was no light
+ * or did not fit its darks and flats.
  */
 export function wantsFirstRun(light: LightRow): boolean {
   return canBeMeasured(light) && (light.state === null || light.reason === 'bad-case');

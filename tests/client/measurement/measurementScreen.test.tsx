@@ -1,5 +1,5 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
-import { fireEvent, render, screen, waitFor } from '@testing-library/react-native';
+import { cleanup, fireEvent, render, screen, waitFor } from '@testing-library/react-native';
 import MeasurementScreen from '@/app/(lab)/measurements/[measurementId]';
 import { ApiProblem } from '@/hooks/api/ApiProblem';
 import { call, callText } from '@/hooks/api/call';
@@ -31,12 +31,20 @@ function show(answer: MeasurementDetail | ApiProblem | null): void {
       mutations: { gcTime: Infinity },
     },
   });
+  shown = client;
   render(
     <QueryClientProvider client={client}>
       <MeasurementScreen />
     </QueryClientProvider>,
   );
 }
+
+let shown: QueryClient | undefined;
+// What is kept of the pictures has a time of its own, on which the process would wait.
+afterEach(() => {
+  cleanup();
+  shown?.clear();
+});
 
 describe('measurement screen', () => {
   beforeEach(() => mockRole.mockReturnValue('technician'));
